@@ -25,7 +25,8 @@ function supplyVoltage(file: CircuitFile, set: Readonly<Record<string, unknown>>
   const source = parts.find((part) => part.kind === "voltageSource");
   if (source === undefined) return null;
   const written = set[`${source.ref}.dc`] ?? source.params?.["dc"];
-  if (typeof written !== "string" && typeof written !== "number") return null;
+  if (typeof written === "number") return formatQuantity(written, "V");
+  if (typeof written !== "string") return null;
   const read = readValue(written, "voltage");
   return read.ok ? formatQuantity(read.value.value, "V") : null;
 }

@@ -1,0 +1,174 @@
+import { compare } from "../comparison/compare";
+import { readCircuitFile } from "../kinds/read-circuit";
+import { judge } from "../stress/judge";
+import { auditChainFault } from "./audit-chain";
+import { type BoundDigests, boundDigest, boundDigests } from "./bound-digest";
+import { canonicalDigest } from "./canonical";
+import { numberDifferences } from "./number-differences";
+import type { RecordRevision, ReviewRecord } from "./review-record";
+import { checkSeal, type SealedRecord } from "./seal";
+
+/** One thing that was checked, and what was found. */
+export interface RecordCheck {
+  readonly check:
+    | "digest"
+    | "signature"
+    | "circuits"
+    | "bound"
+    | "signatures"
+    | "audit"
+    | "results"
+    | "comparison";
+  readonly holds: boolean;
+  /** One sentence. */
+  readonly message: string;
+}
+
+export interface RecordVerdict {
+  readonly holds: boolean;
+  readonly design: string;
+  readonly revision: string;
+  readonly digest: string;
+  readonly fingerprint: string | null;
+  readonly checks: readonly RecordCheck[];
+}
+
+/**
+ * Checks a sealed record offline: its digest and signature, the digests of its circuits, what each
+ * person's signature is bound to, the audit chain; then solves both circuits again and compares every
+ * number. All checks are made and told, not only the first that fails.
+ */
+export async function verifyRecord(sealed: SealedRecord): Promise<RecordVerdict> {
+  const { record } = sealed;
+  const seal = await checkSeal(sealed);
+  const digestHolds = seal.ok || seal.error === "signature";
+  const checks: RecordCheck[] = [
+    digestHolds
+      ? held("digest", "The digest is that of the record.")
+      : broken(
+          "digest",
+          "The record is not the one its digest was taken of: something in it was changed.",
+        ),
+    seal.ok
+      ? held("signature", "The workspace key signed this record.")
+      : broken("signature", "The workspace key did not sign this record as it stands."),
+    circuitsCheck(record),
+    boundCheck(record),
+    signaturesCheck(record),
+    auditCheck(record),
+    ...solvedAgainChecks(record),
+  ];
+  return {
+    holds: checks.every((one) => one.holds),
+    design: record.design.number,
+    revision: record.revision.letter,
+    digest: sealed.digest,
+    fingerprint: seal.ok ? seal.value.fingerprint : null,
+    checks,
+  };
+}
+
+function revisionsOf(record: ReviewRecord): readonly RecordRevision[] {
+  return record.base === null ? [record.revision] : [record.revision, record.base];
+}
+
+function circuitsCheck(record: ReviewRecord): RecordCheck {
+  const wrong = revisionsOf(record).find(
+    (revision) => canonicalDigest(revision.circuit) !== revision.digest,
+  );
+  return wrong === undefined
+    ? held("circuits", "Each circuit has its own digest.")
+    : broken("circuits", `The circuit of Rev ${wrong.letter} is not the one its digest names.`);
+}
+
+function boundNow(record: ReviewRecord): BoundDigests {
+  return boundDigests({
+    circuit: record.revision.digest,
+    base: record.base?.digest ?? null,
+    results: canonicalDigest(record.result),
+    policy: record.revision.circuit.policy ?? null,
+    findings: record.findings,
+    decisions: record.decisions,
+  });
+}
+
+function boundCheck(record: ReviewRecord): RecordCheck {
+  const now: Readonly<Record<string, string | null>> = { ...boundNow(record) };
+  const wrong = Object.entries(record.bound).find(([name, digest]) => now[name] !== digest);
+  return wrong === undefined
+    ? held(
+        "bound",
+        "Circuit, base, results, policy, findings and decisions have the digests they were signed under.",
+      )
+    : broken("bound", `The ${wrong[0]} are not those that were signed.`);
+}
+
+function signaturesCheck(record: ReviewRecord): RecordCheck {
+  const now = boundNow(record);
+  const signatures = record.decisions.filter((decision) => decision.kind === "signature");
+  const ours = signatures.filter((signature) => signature.revision === record.revision.letter);
+  const wrong = ours.find(
+    (signature) => signature.boundDigest !== boundDigest(now, signature.meaning),
+  );
+  if (wrong !== undefined)
+    return broken(
+      "signatures",
+      `${wrong.name}'s signature (${wrong.meaning}) is bound to something else and is void.`,
+    );
+  if (record.releasedAt !== null && !ours.some((signature) => signature.meaning === "approved"))
+    return broken("signatures", "The record says released, but nobody signed as approver.");
+  return held("signatures", `${ours.length} signatures, each bound to what stands here.`);
+}
+
+function auditCheck(record: ReviewRecord): RecordCheck {
+  const fault = auditChainFault(record.audit);
+  return fault === null
+    ? held("audit", `${record.audit.length} audit entries, chained without a gap.`)
+    : broken("audit", `The audit chain is broken: ${fault}.`);
+}
+
+function solvedAgainChecks(record: ReviewRecord): readonly RecordCheck[] {
+  const proposed = readCircuitFile(record.revision.circuit);
+  if (!proposed.ok)
+    return [
+      broken(
+        "results",
+        `The circuit cannot be read: ${proposed.error[0]?.message ?? "no reason given"}`,
+      ),
+    ];
+  const solved = judge(proposed.value, { everyCondition: true });
+  const differences = numberDifferences(record.result, solved);
+  const checks = [
+    differences.length === 0
+      ? held("results", `Solved again (engine ${solved.engine}): every number agrees.`)
+      : broken(
+          "results",
+          `Solved again (engine ${solved.engine}): ${differences.length} numbers differ, first ${differences[0] ?? ""}.`,
+        ),
+  ];
+  if (record.base === null || record.comparison === null) return checks;
+  const base = readCircuitFile(record.base.circuit);
+  if (!base.ok) return [...checks, broken("comparison", "The base circuit cannot be read.")];
+  const again = compare(
+    { file: record.base.circuit, circuit: base.value },
+    { file: record.revision.circuit, circuit: proposed.value },
+  );
+  const moved = numberDifferences(record.comparison, again);
+  return [
+    ...checks,
+    moved.length === 0
+      ? held("comparison", "Compared again: every shift and cause agrees.")
+      : broken(
+          "comparison",
+          `Compared again: ${moved.length} numbers differ, first ${moved[0] ?? ""}.`,
+        ),
+  ];
+}
+
+function held(check: RecordCheck["check"], message: string): RecordCheck {
+  return { check, holds: true, message };
+}
+
+function broken(check: RecordCheck["check"], message: string): RecordCheck {
+  return { check, holds: false, message };
+}
