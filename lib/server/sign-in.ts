@@ -54,6 +54,11 @@ export async function actingMember(headers: Headers): Promise<Result<ActingMembe
   });
 }
 
+/** Whether a request brings a session cookie, valid or not: without a member behind it, the session has ended. */
+export function carriesSession(headers: Headers): boolean {
+  return /(?:^|;\s*)(?:__Secure-)?ampersign\.session_token=[^;]/.test(headers.get("cookie") ?? "");
+}
+
 /**
  * Opens a session. An unknown address and a wrong password are the same answer after the same work.
  * @returns the cookies to set
