@@ -63,6 +63,9 @@ export interface Parts {
     readonly dropToPlus: number;
     readonly dropToMinus: number;
     readonly delay: number;
+    /** The output's ends, V to the reference; null: given by the supplies and the drops. */
+    readonly outputLow: number | null;
+    readonly outputHigh: number | null;
   };
   switch: {
     readonly closed: boolean;

@@ -1,0 +1,9 @@
+import type { KindDescription } from "./description";
+import { required } from "./parameter";
+
+export const cccs: KindDescription<"cccs"> = {
+  kind: "cccs",
+  pins: ["plus", "minus"],
+  parameters: { gain: required("ratio") },
+  refersTo: "control",
+};

@@ -1,0 +1,7 @@
+import type { KindDescription } from "./description";
+
+export const connector: KindDescription<"connector"> = {
+  kind: "connector",
+  pins: "any",
+  parameters: {},
+};

@@ -1,0 +1,7 @@
+import type { KindDescription } from "./description";
+
+export const testPoint: KindDescription<"testPoint"> = {
+  kind: "testPoint",
+  pins: "any",
+  parameters: {},
+};
