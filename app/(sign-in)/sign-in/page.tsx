@@ -15,7 +15,6 @@ export default async function SignInPage(props: {
   const query = await props.searchParams;
   const next = ownPath(only(query["next"]));
   const problem = only(query["problem"]);
-  const email = only(query["email"]) ?? "";
   const member = await actingMember(await headers());
   if (member.ok) redirect(next);
   const sentence = signInSentence(problem);
@@ -33,7 +32,7 @@ export default async function SignInPage(props: {
       <form action="/api/sign-in" method="post">
         <label>
           <span className="cap">E-mail address</span>
-          <input name="email" type="email" autoComplete="username" required defaultValue={email} />
+          <input name="email" type="email" autoComplete="username" required />
         </label>
         <label>
           <span className="cap">Password</span>

@@ -7,14 +7,13 @@ export async function POST(request: Request): Promise<Response> {
   if (!isOwnOrigin(request.headers)) return new Response(null, { status: 403 });
   const form = await request.formData().catch(() => new FormData());
   const next = ownPath(textOf(form, "next"));
-  const email = textOf(form, "email");
   const outcome = await signIn({
-    email,
+    email: textOf(form, "email"),
     password: textOf(form, "password"),
     headers: request.headers,
   });
   if (outcome.ok) return seeOther(next, outcome.value);
-  const query = new URLSearchParams({ problem: outcome.error, email });
+  const query = new URLSearchParams({ problem: outcome.error });
   if (next !== "/") query.set("next", next);
   return seeOther(`/sign-in?${query}`, []);
 }
