@@ -8,5 +8,5 @@ export const transformerSymbol: PartSymbol = {
     { path: "M-1.6 -15V15M1.6 -15V15" },
   ],
   pins: { primary1: [-20, -20], primary2: [-20, 20], secondary1: [20, -20], secondary2: [20, 20] },
-  box: [-20, -20, 20, 20],
+  box: [-20, -21, 20, 21],
 };
