@@ -47,7 +47,7 @@ export async function migrate(
   }
 }
 
-/** The migrations of a folder, oldest first. */
+/** The migrations of a folder, oldest first. @internal to this file and to .ci/new-migration.ts */
 export function readMigrations(folder: string): readonly Migration[] {
   return readdirSync(folder, { withFileTypes: true })
     .filter((entry) => entry.isDirectory())

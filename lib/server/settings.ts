@@ -28,7 +28,7 @@ export function settings(environment: NodeJS.ProcessEnv = process.env): Settings
 }
 
 /** A port of the environment; 3000 where none is given, 0 for any that is free. @throws when it is not a port */
-export function readPort(given: string | undefined): number {
+function readPort(given: string | undefined): number {
   if (given === undefined || given === "") return 3000;
   const port = Number(given);
   if (Number.isInteger(port) && port >= 0 && port < 65_536) return port;
