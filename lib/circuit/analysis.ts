@@ -59,5 +59,8 @@ export type Waveform =
       readonly delay: number;
       readonly phase: number;
     }
-  | { readonly shape: "points"; readonly points: readonly (readonly [time: number, value: number])[] }
+  | {
+      readonly shape: "points";
+      readonly points: readonly (readonly [time: number, value: number])[];
+    }
   | { readonly shape: "step"; readonly from: number; readonly to: number; readonly at: number };

@@ -6,7 +6,8 @@ import { below } from "./pointer";
 /** The longest text that is read, in UTF-16 code units. */
 const LONGEST = 32 * 1024 * 1024;
 const NUMBER = /-?(?:0|[1-9]\d*)(?:\.\d+)?(?:[eE][+-]?\d+)?/y;
-const PLAIN_CHARACTERS = /[^"\\\u0000-\u001F]*/y;
+/** From the space on, all but the quotation mark and the reverse solidus. */
+const PLAIN_CHARACTERS = /[ !#-[\]-\uFFFF]*/y;
 const BLANKS = /[ \t\n\r]*/y;
 const LINE_END = /\r\n|\n|\r/g;
 const ESCAPES: ReadonlyMap<string, string> = new Map([

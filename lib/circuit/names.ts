@@ -10,27 +10,22 @@ const CONTROL = /\p{Cc}/u;
 export function readName(place: Place): string | null {
   const name = place.text();
   if (name === null) return null;
-  return checkName(place, name) ? name : null;
+  if (name === "") return place.fault("badValue", "A name must not be empty; give one.");
+  if (!/[/.]/.test(name) && !CONTROL.test(name)) return name;
+  const shown = quoted(name.replace(/\p{Cc}/gu, "␣"));
+  const message = `The name ${shown} has "/", "." or a control character; leave it out.`;
+  return place.fault("badValue", message);
 }
 
-/** Whether a text may serve as a name; reports at the place where it may not. */
-export function checkName(place: Place, name: string): boolean {
-  if (name === "") {
-    place.fault("badValue", "A name must not be empty; give one.");
-    return false;
-  }
-  if (/[/.]/.test(name) || CONTROL.test(name)) {
-    const shown = quoted(name.replace(/\p{Cc}/gu, "\u2423"));
-    place.fault("badValue", `The name ${shown} has "/", "." or a control character; leave it out.`);
-    return false;
-  }
-  return true;
-}
-
-/** A title-like text of one line: not empty, without control characters. */
+/** A title of one line: not empty, without control characters. */
 export function readHeading(place: Place): string | null {
   const text = place.text();
-  if (text === null) return null;
-  if (text !== "" && !CONTROL.test(text)) return text;
-  return place.fault("badValue", "This must be a text of one line, not empty.");
+  return text !== null && checkHeading(place, text) ? text : null;
+}
+
+/** Whether a text, here or as the key of this place, is one line and not empty. */
+export function checkHeading(place: Place, text: string): boolean {
+  if (text !== "" && !CONTROL.test(text)) return true;
+  place.fault("badValue", "A name must be a text of one line, not empty.");
+  return false;
 }

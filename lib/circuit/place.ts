@@ -36,7 +36,7 @@ export class Place {
     for (const [key, place] of entries) {
       if (known.includes(key)) continue;
       const hint = meaning(key, known);
-      place.fault("unknownKey", `There is no key ${quoted(key)} here${hint === "" ? "." : hint}`);
+      place.fault("unknownKey", `There is no key ${quoted(key)} here${hint}`);
     }
     return new Fields(this, new Map(entries));
   }
@@ -78,9 +78,9 @@ export class Place {
     if (!Number.isSafeInteger(value)) {
       return this.fault("badValue", `${value} is not a whole number.`);
     }
-    if (value < least) return this.fault("outOfRange", `${value} is too few; at least ${least}.`);
-    if (value > most) return this.fault("outOfRange", `${value} is too many; at most ${most}.`);
-    return value;
+    if (value >= least && value <= most) return value;
+    const bounds = `at least ${least} and at most ${most}`;
+    return this.fault("outOfRange", `${value} is out of range; it must be ${bounds}.`);
   }
 
   /** A value of this quantity that names no tolerance. */

@@ -7,8 +7,7 @@ const TEXT_STYLES = ["heading", "note"] as const;
 
 /** Checks where a part is drawn, and how it is turned. */
 export function checkPlacing(fields: Fields): Point | null {
-  const turn = fields.optional("turn");
-  if (turn !== null) turn.count(0, 3);
+  fields.optional("turn")?.count(0, 3);
   fields.optional("mirror")?.flag();
   const at = fields.optional("at");
   return at === null ? null : readPoint(at);
@@ -91,7 +90,7 @@ function checkEnd(place: Place, drawn: Drawn, junctions: ReadonlySet<string>): v
 }
 
 function readPoint(place: Place): Point | null {
-  const [x, y, more] = place.items() ?? [];
+  const [x, y, more] = Array.isArray(place.value) ? (place.items() ?? []) : [];
   if (typeof x?.value === "number" && typeof y?.value === "number" && more === undefined) {
     return [x.value, y.value];
   }

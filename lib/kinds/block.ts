@@ -42,6 +42,8 @@ interface BrokenPart {
   readonly entry: "broken";
   readonly ref: string;
   readonly pins: ReadonlyMap<string, string | null>;
+  /** Whether these are all its pins. */
+  readonly clear: boolean;
 }
 
 export type BlockEntry = BlockPart | BlockUse | BrokenPart;
@@ -53,6 +55,8 @@ export interface Block {
   readonly ports: ReadonlySet<string>;
   /** By reference designator, in file order. */
   readonly entries: ReadonlyMap<string, BlockEntry>;
+  /** Whether every net of the block could be made out. */
+  readonly clear: boolean;
 }
 
 export type Blocks = ReadonlyMap<string, Block>;

@@ -46,7 +46,7 @@ export function circuitAddresses(blocks: Blocks, top: Block | null, nets: KnownN
       const hint = meaning(name, nets.fitted);
       const why = nets.unfitted.has(name)
         ? `Only parts that are not fitted touch the net ${quoted(name)}.`
-        : `There is no net ${quoted(name)}${hint === "" ? "." : hint}`;
+        : `There is no net ${quoted(name)}${hint}`;
       place.fault("noSuchNet", why);
       return false;
     },

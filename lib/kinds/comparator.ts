@@ -17,4 +17,12 @@ export const comparator: KindDescription<"comparator"> = {
     outputLow: orNone("voltage", anyValue),
     outputHigh: orNone("voltage", anyValue),
   },
+  contradiction: (values) => {
+    const [low, high] = [values.get("outputLow"), values.get("outputHigh")];
+    if (typeof low !== "number" || typeof high !== "number" || low < high) return null;
+    return {
+      parameter: "outputHigh",
+      message: "The output's high level must be above its low one.",
+    };
+  },
 };

@@ -1,5 +1,11 @@
-import type { ParameterOf } from "./parameter";
+import type { ParameterOf, ParameterValue } from "./parameter";
 import type { Kind, Parts } from "./part";
+
+/** Parameters that do not go together: the one to mend, and a sentence. */
+export interface Contradiction {
+  readonly parameter: string;
+  readonly message: string;
+}
 
 /** What the circuit file may say of a kind. */
 export interface KindDescription<K extends Kind> {
@@ -12,6 +18,8 @@ export interface KindDescription<K extends Kind> {
   readonly parameters: { readonly [P in keyof Parts[K]]: ParameterOf<Parts[K][P]> };
   /** What stands beside the pins: a part whose current controls, or two coupled inductors. */
   readonly refersTo?: "control" | "of";
+  /** What is wrong with read parameters taken together. */
+  readonly contradiction?: (values: ReadonlyMap<string, ParameterValue>) => Contradiction | null;
   /** Whether datasheet points (`fit`) may stand for model numbers. */
   readonly fitted?: true;
 }

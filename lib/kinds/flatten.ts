@@ -1,6 +1,5 @@
 import type { Place } from "../circuit/place";
-import { quoted } from "../values/read-value";
-import type { Block, BlockPart, Blocks } from "./block";
+import type { Block, BlockPart, Blocks, BlockUse } from "./block";
 import { type Override, readSet } from "./override";
 import type { ParameterValue } from "./parameter";
 
@@ -19,72 +18,6 @@ export interface FlatPart {
 /** Other values by parameter name; `tolerances.NAME` is a half-width. */
 export type Overrides = ReadonlyMap<string, ParameterValue>;
 
-/** Blocks inside one another. */
-const DEEPEST = 200;
-const MOST_PARTS = 100_000;
-
-/**
- * Reports blocks that contain themselves or grow too large; whether the circuit can be flattened from `top`.
- * The size is found before anything is copied, so that a few lines cannot ask for a million parts.
- */
-export function checkContainment(blocks: Blocks, top: Block): boolean {
-  const sizes = new Map<Block, { parts: number; height: number }>();
-  const open = new Set<Block>();
-  let good = true;
-
-  const measure = (block: Block): { parts: number; height: number } => {
-    const known = sizes.get(block);
-    if (known !== undefined) return known;
-    open.add(block);
-    const size = { parts: 0, height: 1 };
-    for (const entry of block.entries.values()) {
-      const used = entry.entry === "use" ? blocks.get(entry.block) : undefined;
-      if (entry.entry !== "use" || used === undefined) {
-        size.parts += 1;
-        continue;
-      }
-      const fault = faultOfUse(entry.place, used, open);
-      if (fault) {
-        good = false;
-        continue;
-      }
-      const inner = measure(used);
-      size.parts += inner.parts;
-      size.height = Math.max(size.height, inner.height + 1);
-    }
-    open.delete(block);
-    sizes.set(block, size);
-    return size;
-  };
-
-  for (const block of blocks.values()) measure(block);
-  const { parts, height } = measure(top);
-  if (parts > MOST_PARTS) {
-    const message = `With its blocks put in, the circuit has more than ${MOST_PARTS} parts.`;
-    top.place.fault("tooLarge", message);
-    return false;
-  }
-  if (height > DEEPEST) {
-    top.place.fault("tooLarge", `The blocks are nested more than ${DEEPEST} deep.`);
-    return false;
-  }
-  return good;
-}
-
-function faultOfUse(use: Place, used: Block, open: ReadonlySet<Block>): boolean {
-  const place = use.member("block");
-  if (open.has(used)) {
-    const message = `The block ${quoted(used.name)} contains itself through this use; take it out.`;
-    place.fault("blockContainsItself", message);
-    return true;
-  }
-  if (open.size > DEEPEST) {
-    place.fault("tooLarge", `The blocks are nested more than ${DEEPEST} deep.`);
-    return true;
-  }
-  return false;
-}
-
 /** What every block's uses set, read once for each block and not for each of its copies. */
 export function readSets(blocks: Blocks): ReadonlyMap<Place, readonly Override[]> {
   const sets = new Map<Place, readonly Override[]>();
@@ -99,11 +32,18 @@ export function readSets(blocks: Blocks): ReadonlyMap<Place, readonly Override[]
   return sets;
 }
 
+/** The parts of the whole circuit, and the nets of those that could not be read. */
+export interface Flat {
+  readonly parts: readonly FlatPart[];
+  readonly looseNets: ReadonlySet<string>;
+}
+
+/** Where a copy of a block is put. */
 interface Setting {
   readonly prefix: string;
   readonly fitted: boolean;
-  /** The outer nets of the block's ports. */
-  readonly ports: ReadonlyMap<string, string>;
+  /** What a net of the block is called in the whole circuit. */
+  readonly outer: (net: string) => string;
 }
 
 /** Puts the blocks into the blocks that use them, from `top` down, parts in file order. */
@@ -112,45 +52,63 @@ export function flatten(
   top: Block,
   reference: string,
   sets: ReadonlyMap<Place, readonly Override[]>,
-): readonly FlatPart[] {
+): Flat {
   const parts: FlatPart[] = [];
+  const loose: (string | null)[] = [];
   const overrides = new Map<string, Map<string, ParameterValue>>();
 
-  const place = (block: Block, { prefix, fitted, ports }: Setting): void => {
-    const outer = (net: string): string =>
-      net === reference ? reference : (ports.get(net) ?? prefix + net);
+  const put = (block: Block, setting: Setting): void => {
     for (const entry of block.entries.values()) {
-      const path = prefix + entry.ref;
-      if (entry.entry === "part") {
-        parts.push({
-          path,
-          source: entry,
-          pins: new Map(
-            [...entry.pins].map(([pin, net]) => [pin, net === null ? null : outer(net)]),
-          ),
-          control: entry.control === null ? null : prefix + entry.control,
-          of: entry.of === null ? null : [prefix + entry.of[0], prefix + entry.of[1]],
-          fitted: fitted && entry.fitted,
-          overrides: overrides.get(path) ?? new Map(),
-        });
-        continue;
-      }
       const used = entry.entry === "use" ? blocks.get(entry.block) : undefined;
-      if (entry.entry !== "use" || used === undefined) continue;
-      addOverrides(overrides, `${path}/`, sets.get(entry.place) ?? []);
-      const joined = [...entry.pins].flatMap(([port, net]) =>
-        net === null ? [] : [[port, outer(net)] as const],
-      );
-      place(used, {
-        prefix: `${path}/`,
-        fitted: fitted && entry.fitted,
-        ports: new Map(joined),
-      });
+      if (entry.entry === "part") {
+        parts.push(putPart(entry, setting, overrides));
+      } else if (entry.entry === "use" && used !== undefined) {
+        const inner = settingOf(entry, setting, reference);
+        addOverrides(overrides, inner.prefix, sets.get(entry.place) ?? []);
+        put(used, inner);
+      } else {
+        loose.push(...outerPins(entry.pins, setting).values());
+      }
     }
   };
 
-  place(top, { prefix: "", fitted: true, ports: new Map() });
-  return parts;
+  const outer = (net: string): string => net;
+  put(top, { prefix: "", fitted: true, outer });
+  return { parts, looseNets: new Set(loose.filter((net) => net !== null)) };
+}
+
+function putPart(
+  part: BlockPart,
+  setting: Setting,
+  overrides: ReadonlyMap<string, Overrides>,
+): FlatPart {
+  const { prefix } = setting;
+  const path = prefix + part.ref;
+  return {
+    path,
+    source: part,
+    pins: outerPins(part.pins, setting),
+    control: part.control === null ? null : prefix + part.control,
+    of: part.of === null ? null : [prefix + part.of[0], prefix + part.of[1]],
+    fitted: setting.fitted && part.fitted,
+    overrides: overrides.get(path) ?? new Map(),
+  };
+}
+
+function outerPins(
+  pins: ReadonlyMap<string, string | null>,
+  { outer }: Setting,
+): ReadonlyMap<string, string | null> {
+  return new Map([...pins].map(([pin, net]) => [pin, net === null ? null : outer(net)]));
+}
+
+/** Inside a use, a port's net bears the outer name, the reference its own, and every other net the path. */
+function settingOf(use: BlockUse, setting: Setting, reference: string): Setting {
+  const prefix = `${setting.prefix}${use.ref}/`;
+  const joined = outerPins(use.pins, setting);
+  const outer = (net: string): string =>
+    net === reference ? reference : (joined.get(net) ?? prefix + net);
+  return { prefix, fitted: setting.fitted && use.fitted, outer };
 }
 
 /** Adds what a `set` gives. What is there already comes from further out, and stays. */

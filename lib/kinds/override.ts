@@ -56,6 +56,9 @@ function readOverride(
   if (read === null) return null;
   if (read.tolerance !== null && !letterFits(place, target, read.tolerance, part, keys))
     return null;
+  const together = new Map([...part.parameters, [target.name, read.value]]);
+  const contradiction = catalogue[part.kind].contradiction?.(together) ?? null;
+  if (contradiction !== null) return place.fault("outOfRange", contradiction.message);
   return { path: target.part, name: target.name, ...read };
 }
 
@@ -94,12 +97,12 @@ export function findPart(
   if (found?.entry.entry === "part") return found.entry;
   const hint =
     found === null ? meaning(path, block.entries.keys()) : "; it is a block, name a part in it.";
-  return place.fault("noSuchPart", `There is no part ${quoted(path)}${hint === "" ? "." : hint}`);
+  return place.fault("noSuchPart", `There is no part ${quoted(path)}${hint}`);
 }
 
 /** Reports that a part has no such parameter. */
 export function noSuchParameter(place: Place, part: BlockPart, name: string): null {
   const hint = meaning(name, Object.keys(catalogue[part.kind].parameters));
-  const message = `A ${part.kind} has no parameter ${quoted(name)}${hint === "" ? "." : hint}`;
+  const message = `A ${part.kind} has no parameter ${quoted(name)}${hint}`;
   return place.fault("noSuchParam", message);
 }

@@ -3,7 +3,14 @@ import type { Fields, Place } from "../circuit/place";
 import { checkDrawing } from "../circuit/read-drawing";
 import { meaning } from "../values/nearest-word";
 import { quoted } from "../values/read-value";
-import { type Block, type BlockEntry, type BlockPart, type Blocks, findEntry } from "./block";
+import {
+  type Block,
+  type BlockEntry,
+  type BlockPart,
+  type Blocks,
+  type BlockUse,
+  findEntry,
+} from "./block";
 import type { Kind } from "./part";
 import { readEntry } from "./read-parts";
 
@@ -21,13 +28,7 @@ export function readBlocks(place: Place, reference: string): Blocks {
   }
   for (const block of blocks.values()) {
     for (const entry of block.entries.values()) {
-      if (entry.entry === "use")
-        checkUse(entry.place, entry.pins, blocks.get(entry.block), reference);
-      if (entry.entry === "use" && !blocks.has(entry.block)) {
-        const hint = meaning(entry.block, blocks.keys());
-        const message = `There is no block ${quoted(entry.block)}${hint === "" ? "." : hint}`;
-        member(entry.place, "block").fault("noSuchBlock", message);
-      }
+      if (entry.entry === "use") checkUse(entry, blocks, reference);
       if (entry.entry === "part") checkReferences(entry, block, blocks);
     }
   }
@@ -36,9 +37,9 @@ export function readBlocks(place: Place, reference: string): Blocks {
 
 function readBlock(name: string, place: Place): Block {
   const fields = place.fields(BLOCK_KEYS);
-  if (fields === null) return { name, place, ports: new Set(), entries: new Map() };
+  if (fields === null) return { name, place, ports: new Set(), entries: new Map(), clear: false };
   const ports = readPorts(fields.optional("ports"));
-  const entries = readEntries(fields);
+  const { entries, clear } = readEntries(fields);
   const pins = new Map(
     [...entries].map(([ref, entry]) => [
       ref,
@@ -46,7 +47,7 @@ function readBlock(name: string, place: Place): Block {
     ]),
   );
   checkDrawing(fields, { pins });
-  return { name, place, ports, entries };
+  return { name, place, ports, entries, clear };
 }
 
 function readPorts(place: Place | null): ReadonlySet<string> {
@@ -61,46 +62,49 @@ function readPorts(place: Place | null): ReadonlySet<string> {
   return ports;
 }
 
-function readEntries(fields: Fields): ReadonlyMap<string, BlockEntry> {
+function readEntries(fields: Fields): Pick<Block, "entries" | "clear"> {
   const entries = new Map<string, BlockEntry>();
   const ids = new Set<string>();
-  for (const place of fields.required("parts")?.items() ?? []) {
+  const items = fields.required("parts")?.items() ?? null;
+  for (const place of items ?? []) {
     const entry = readEntry(place);
     if (entry === null) continue;
     if (entries.has(entry.ref)) {
       const message = `The designator "${entry.ref}" is taken; give this part another.`;
-      member(place, "ref").fault("duplicateRef", message);
+      place.member("ref").fault("duplicateRef", message);
       continue;
     }
     entries.set(entry.ref, entry);
     if (entry.entry !== "part" || entry.id === null) continue;
     if (ids.has(entry.id)) {
       const message = `The id ${quoted(entry.id)} is another part's; each needs its own.`;
-      member(place, "id").fault("duplicateName", message);
+      place.member("id").fault("duplicateName", message);
     }
     ids.add(entry.id);
   }
-  return entries;
+  const clear = [...entries.values()].every((entry) => entry.entry !== "broken" || entry.clear);
+  return { entries, clear: clear && entries.size === items?.length };
 }
 
-/** Whether the pins of a use of a block are ports of it. */
-function checkUse(
-  place: Place,
-  pins: ReadonlyMap<string, string | null>,
-  used: Block | undefined,
-  reference: string,
-): void {
-  if (used === undefined) return;
-  for (const [pin, net] of pins) {
+/** Whether the block of a use exists, and its pins are ports of it. */
+function checkUse(use: BlockUse, blocks: Blocks, reference: string): void {
+  const used = blocks.get(use.block);
+  if (used === undefined) {
+    const hint = meaning(use.block, blocks.keys());
+    use.place.member("block").fault("noSuchBlock", `There is no block ${quoted(use.block)}${hint}`);
+    return;
+  }
+  for (const [pin, net] of use.pins) {
+    const place = use.place.member("pins").member(pin);
     if (!used.ports.has(pin)) {
       const ports = [...used.ports];
       const hint = meaning(pin, ports);
       const names = ports.length === 0 ? "It has none." : `Its ports are ${ports.join(", ")}.`;
-      const message = `The block "${used.name}" has no port ${quoted(pin)}${hint === "" ? `. ${names}` : hint}`;
-      member(member(place, "pins"), pin).fault("unknownPin", message);
+      const end = hint === "." ? `. ${names}` : hint;
+      place.fault("unknownPin", `The block "${used.name}" has no port ${quoted(pin)}${end}`);
     } else if (pin === reference && net !== null && net !== reference) {
       const message = `The port "${pin}" is the reference, which is one net in every block; join it to "${reference}".`;
-      member(member(place, "pins"), pin).fault("badValue", message);
+      place.fault("badValue", message);
     }
   }
 }
@@ -108,14 +112,14 @@ function checkUse(
 /** Whether `control` and `of` lead to fitted parts of a kind that can serve. */
 function checkReferences(part: BlockPart, block: Block, blocks: Blocks): void {
   if (part.control !== null) {
-    const place = member(part.place, "control");
+    const place = part.place.member("control");
     checkTarget(place, part.control, CONTROLLING, { part, block, blocks });
   }
   if (part.of === null) return;
-  const place = member(part.place, "of");
+  const place = part.place.member("of");
   const [first, second] = part.of;
-  checkTarget(member(place, 0), first, ["inductor"], { part, block, blocks });
-  checkTarget(member(place, 1), second, ["inductor"], { part, block, blocks });
+  checkTarget(place.member(0), first, ["inductor"], { part, block, blocks });
+  checkTarget(place.member(1), second, ["inductor"], { part, block, blocks });
   if (first === second) place.fault("badValue", "A coupling is of two different inductors.");
 }
 
@@ -129,7 +133,7 @@ function checkTarget(
   if (found === "unclear") return;
   if (found === null) {
     const hint = meaning(path, block.entries.keys());
-    place.fault("noSuchPart", `There is no part ${quoted(path)}${hint === "" ? "." : hint}`);
+    place.fault("noSuchPart", `There is no part ${quoted(path)}${hint}`);
   } else if (found.entry.entry === "use" || !allowed.includes(found.entry.kind)) {
     place.fault(
       "badValue",
@@ -138,8 +142,4 @@ function checkTarget(
   } else if (part.fitted && !found.fitted) {
     place.fault("noSuchPart", `The part ${quoted(path)} is not fitted, but ${part.ref} needs it.`);
   }
-}
-
-function member(place: Place, key: string | number): Place {
-  return place.member(key);
 }

@@ -12,9 +12,10 @@ import { quoted } from "../values/read-value";
 import { fail, ok, type Result } from "../values/result";
 import { assemblePart } from "./assemble-part";
 import type { Block, Blocks } from "./block";
+import { checkContainment } from "./check-containment";
 import type { Circuit, Condition } from "./circuit";
 import { circuitAddresses } from "./circuit-addresses";
-import { addOverrides, checkContainment, type FlatPart, flatten, readSets } from "./flatten";
+import { addOverrides, type FlatPart, flatten, readSets } from "./flatten";
 import { knownNets } from "./known-nets";
 import type { ParameterValue } from "./parameter";
 import type { Part } from "./part";
@@ -65,10 +66,9 @@ function readFile(file: Place): Undigested | null {
   const blocks: Blocks = placed === null ? new Map() : readBlocks(placed, reference);
   const top = findTop(fields, placed, blocks);
   const sets = readSets(blocks);
-  const flat =
-    top !== null && checkContainment(blocks, top) ? flatten(blocks, top, reference, sets) : null;
+  const flat = checkContainment(blocks, top) ? flatten(blocks, top, reference, sets) : null;
 
-  const fitted = (flat ?? []).filter((part) => part.fitted);
+  const fitted = (flat?.parts ?? []).filter((part) => part.fitted);
   const held = referenceNet(reference, fitted);
   const nets = knownNets(blocks, flat, held);
   const addresses = circuitAddresses(blocks, top, nets);
@@ -114,7 +114,7 @@ function findTop(fields: Fields, placed: Place | null, blocks: Blocks): Block | 
   const top = name === null ? undefined : blocks.get(name);
   if (name !== null && top === undefined) {
     const hint = meaning(name, blocks.keys());
-    place.fault("noSuchBlock", `There is no block ${quoted(name)}${hint === "" ? "." : hint}`);
+    place.fault("noSuchBlock", `There is no block ${quoted(name)}${hint}`);
   }
   return top ?? null;
 }

@@ -1,6 +1,6 @@
 import type { Addresses } from "../circuit/addresses";
 import { readHeading } from "../circuit/names";
-import type { Place } from "../circuit/place";
+import { isRecord, type Place } from "../circuit/place";
 import { readAnalysis } from "../circuit/read-analysis";
 import { readSpread } from "../circuit/read-spread";
 import { celsius } from "../values/range";
@@ -79,7 +79,7 @@ function readCondition(
     analysis: analysis === null ? nominal.condition.analysis : readAnalysis(analysis, addresses),
     start: readStart(fields.optional("start"), addresses),
     spread: spread === null ? null : readSpread(spread),
-    set: Object.fromEntries((set?.entries() ?? []).map(([key, { value }]) => [key, value])),
+    set: isRecord(set?.value) ? set.value : {},
   };
   const overrides = top === null ? [] : readSet(set, blocks, top);
   if (name === null) return null;

@@ -70,8 +70,13 @@ export function readParameters(kind: Kind, sources: Sources): ReadParameters | n
       given.get(name)?.place.fault("badValue", message);
     }
   }
-  const complete = values.size === described.length;
-  return complete ? { values, statedTolerances: stated } : null;
+  if (values.size < described.length) return null;
+  const contradiction = catalogue[kind].contradiction?.(values) ?? null;
+  if (contradiction !== null) {
+    const place = given.get(contradiction.parameter)?.place ?? sources.part;
+    return place.fault("outOfRange", contradiction.message);
+  }
+  return { values, statedTolerances: stated };
 }
 
 type Given = ReadonlyMap<string, { readonly place: Place; readonly read: GivenParameter | null }>;
@@ -87,7 +92,7 @@ function readGiven(
     if (parameter !== undefined)
       return [[name, { place, read: readParameter(parameter, place) }] as const];
     const hint = meaning(name, known.keys());
-    const message = `A ${kind} has no parameter ${quoted(name)}${hint === "" ? "." : hint}`;
+    const message = `A ${kind} has no parameter ${quoted(name)}${hint}`;
     place.fault("unknownKey", message);
     return [];
   });
@@ -102,45 +107,62 @@ function defaultOf(parameter: Parameter): ParameterValue | undefined {
 function readStated(
   described: readonly (readonly [string, Parameter])[],
   given: Given,
-  { part, params, tolerances }: Sources,
+  sources: Sources,
 ): ReadonlyMap<string, number> {
-  const stated = new Map<string, number>();
   const first = firstOfTolerance(described);
   const own = given.get("tolerance")?.read?.value;
+  const stated = readTolerances(described, first, sources.tolerances);
   if (first !== null && typeof own === "number") stated.set(first, own);
+
+  const letters: [string, number][] = [];
+  for (const [name, { place, read }] of given) {
+    const letter = read?.tolerance ?? null;
+    const other = stated.get(name);
+    if (letter !== null && other !== undefined && !agree(letter, other)) {
+      place.fault("badValue", "The tolerance letter contradicts the tolerance given beside it.");
+    } else if (letter !== null && other === undefined) {
+      letters.push([name, letter]);
+    }
+  }
+  noteLetters(letters, first, sources);
+  return new Map([...stated, ...letters]);
+}
+
+function readTolerances(
+  described: readonly (readonly [string, Parameter])[],
+  first: string | null,
+  tolerances: Place | null,
+): Map<string, number> {
   const servable = described.flatMap(([name, parameter]) =>
     parameter.form === "quantity" && name !== first && name !== "tolerance" ? [name] : [],
   );
+  const read = new Map<string, number>();
   for (const [name, place] of tolerances?.entries() ?? []) {
     if (servable.includes(name)) {
       const value = place.quantity("fraction", halfWidth);
-      if (value !== null) stated.set(name, value);
+      if (value !== null) read.set(name, value);
     } else {
-      const own = name === first ? '; its tolerance is "tolerance" in "params".' : ".";
-      place.fault("noSuchParam", `No tolerance of ${quoted(name)} can stand here${own}`);
+      const end = name === first ? '; its tolerance is "tolerance" in "params".' : ".";
+      place.fault("noSuchParam", `No tolerance of ${quoted(name)} can stand here${end}`);
     }
   }
-  const added: [string, number][] = [];
-  for (const [name, { place, read }] of given) {
-    const letter = read?.tolerance ?? null;
-    if (letter === null) continue;
-    const other = stated.get(name);
-    if (other === undefined) {
-      stated.set(name, letter);
-      if (name === first && params !== null) place.reading.add(params.pointer, "tolerance", letter);
-      else added.push([name, letter]);
-    } else if (!agree(letter, other)) {
-      place.fault("badValue", "The tolerance letter contradicts the tolerance given beside it.");
-    }
+  return read;
+}
+
+/** Notes the tolerances of letter codes where they would stand if written out. */
+function noteLetters(
+  letters: readonly (readonly [string, number])[],
+  first: string | null,
+  { part, params, tolerances }: Sources,
+): void {
+  const others = letters.filter(([name]) => name !== first);
+  for (const [name, letter] of letters) {
+    if (name === first && params !== null) part.reading.add(params.pointer, "tolerance", letter);
+    else if (tolerances !== null) part.reading.add(tolerances.pointer, name, letter);
   }
-  if (added.length > 0 && tolerances === null) {
-    part.reading.add(part.pointer, "tolerances", Object.fromEntries(added));
-  } else {
-    for (const [name, letter] of added) {
-      part.reading.add((tolerances ?? part).pointer, name, letter);
-    }
+  if (tolerances === null && others.length > 0) {
+    part.reading.add(part.pointer, "tolerances", Object.fromEntries(others));
   }
-  return stated;
 }
 
 /** Two half-widths that mean the same: one may be a fraction computed from picofarads. */

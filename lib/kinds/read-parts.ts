@@ -9,7 +9,7 @@ import type { BlockEntry } from "./block";
 import { catalogue, kinds } from "./catalogue";
 import type { Kind } from "./part";
 import { readParameters } from "./read-parameters";
-import { readPins } from "./read-pins";
+import { type AllowedPins, readPins } from "./read-pins";
 
 const EVERY_ENTRY = ["ref", "kind", "pins", "fitted", "note", "id", "at", "turn", "mirror"];
 const USE_KEYS = [...EVERY_ENTRY, "block", "set"];
@@ -27,7 +27,7 @@ const ALL_KEYS = [...new Set([...USE_KEYS, ...PART_KEYS, "control", "of", "fit"]
 
 /** Reads one entry of a block's parts; null where it has no reference designator to know it by. */
 export function readEntry(place: Place): BlockEntry | null {
-  const written = new Map(place.entries() ?? []).get("kind")?.value;
+  const written = place.member("kind").value;
   const kind = kinds.find((known) => known === written) ?? null;
   const fields = place.fields(keysOf(written === "block" ? "block" : kind));
   if (fields === null) return null;
@@ -61,10 +61,13 @@ function readCommon(fields: Fields) {
 
 function readUse(fields: Fields, ref: string | null, fitted: boolean): BlockEntry | null {
   const block = fields.required("block")?.text() ?? null;
-  // Which pins it has is known once every block is read.
-  const { pins } = readPins(fields.place, fields.optional("pins"), null);
+  // Which pins it has is known once every block is read; a port left out is a net of its own.
+  const { pins } = readPins(fields.place, fields.optional("pins"), {
+    required: [],
+    optional: "any",
+  });
   if (ref === null) return null;
-  if (block === null) return { entry: "broken", ref, pins };
+  if (block === null) return { entry: "broken", ref, pins, clear: false };
   return { entry: "use", ref, place: fields.place, block, pins, fitted };
 }
 
@@ -73,14 +76,13 @@ function readUnknown(fields: Fields, ref: string | null): BlockEntry | null {
   const word = place?.text() ?? null;
   if (place !== null && word !== null) {
     const hint = meaning(word, [...kinds, "block"]);
-    place.fault("unknownKind", `There is no part kind ${quoted(word)}${hint === "" ? "." : hint}`);
+    place.fault("unknownKind", `There is no part kind ${quoted(word)}${hint}`);
   }
-  const pins = new Map<string, string | null>();
-  for (const [pin, net] of fields.optional("pins")?.entries() ?? []) {
-    if (net.value === null) pins.set(pin, null);
-    else pins.set(pin, readName(net));
-  }
-  return ref === null ? null : { entry: "broken", ref, pins };
+  const { pins, clear } = readPins(fields.place, fields.optional("pins"), {
+    required: [],
+    optional: "any",
+  });
+  return ref === null ? null : { entry: "broken", ref, pins, clear };
 }
 
 function readPart(
@@ -91,12 +93,7 @@ function readPart(
 ): BlockEntry | null {
   const { place } = fields;
   const description = catalogue[kind];
-  const optional = description.optionalPins ?? [];
-  const allowed =
-    description.pins === "any"
-      ? null
-      : { required: description.pins.filter((pin) => !optional.includes(pin)), optional };
-  const { pins, good } = readPins(place, fields.optional("pins"), allowed);
+  const { pins, clear, good } = readPins(place, fields.optional("pins"), allowedPins(kind));
   const parameters = readParameters(kind, {
     part: place,
     params: fields.optional("params"),
@@ -109,7 +106,7 @@ function readPart(
   const judged = readJudged(fields);
   const resolved = refers === undefined || control !== null || of !== null;
   if (ref === null) return null;
-  if (!good || parameters === null || !resolved) return { entry: "broken", ref, pins };
+  if (!good || parameters === null || !resolved) return { entry: "broken", ref, pins, clear };
   return {
     entry: "part",
     ref,
@@ -123,6 +120,12 @@ function readPart(
     ...judged,
     ...common,
   };
+}
+
+function allowedPins(kind: Kind): AllowedPins {
+  const { pins, optionalPins = [] } = catalogue[kind];
+  if (pins === "any") return { required: [], optional: "any" };
+  return { required: pins.filter((pin) => !optionalPins.includes(pin)), optional: optionalPins };
 }
 
 /** The pins in the order of the kind, whatever order the file has: a part's voltage is first minus second. */

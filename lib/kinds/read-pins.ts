@@ -1,51 +1,59 @@
-import { checkName, readName } from "../circuit/names";
+import { checkHeading, readName } from "../circuit/names";
 import type { Place } from "../circuit/place";
 import { meaning } from "../values/nearest-word";
 import { quoted } from "../values/read-value";
 
-/** What pins a part must and may have; null: any. */
+/** What pins a part must have, and which more it may have. */
 export interface AllowedPins {
   readonly required: readonly string[];
-  readonly optional: readonly string[];
+  readonly optional: readonly string[] | "any";
 }
 
-/** The net of each pin (null: on no net), and whether all of it was good. */
 export interface ReadPins {
+  /** The net of each pin; null: on no net. */
   readonly pins: ReadonlyMap<string, string | null>;
+  /** Whether every net could be made out, wrong pins or not. */
+  readonly clear: boolean;
   readonly good: boolean;
 }
 
 /** Reads the pins of a part. What could be read comes back even where something is wrong. */
-export function readPins(part: Place, place: Place | null, allowed: AllowedPins | null): ReadPins {
+export function readPins(part: Place, place: Place | null, allowed: AllowedPins): ReadPins {
   const pins = new Map<string, string | null>();
   if (place === null) {
-    const needed = allowed === null || allowed.required.length > 0;
+    const needed = allowed.required.length > 0;
     if (needed) part.fault("missingKey", 'The key "pins" is missing here; add it.');
-    return { pins, good: !needed };
+    return { pins, clear: !needed, good: !needed };
   }
   const entries = place.entries();
-  if (entries === null) return { pins, good: false };
-  let good = true;
-  const known = allowed === null ? null : [...allowed.required, ...allowed.optional];
+  if (entries === null) return { pins, clear: false, good: false };
+  let known = true;
   for (const [pin, net] of entries) {
-    if (known !== null && !known.includes(pin)) {
-      const hint = meaning(pin, known);
-      const names = known.length === 0 ? "It has none." : `Its pins are ${known.join(", ")}.`;
-      net.fault("unknownPin", `There is no pin ${quoted(pin)}${hint === "" ? `. ${names}` : hint}`);
-      good = false;
-    } else if (known === null && !checkName(net, pin)) {
-      good = false;
-    }
+    known = isKnown(pin, net, allowed) && known;
     const name = net.value === null ? null : readName(net);
-    if (name === null && net.value !== null) good = false;
-    else pins.set(pin, name);
+    if (name !== null || net.value === null) pins.set(pin, name);
   }
-  const given = new Set(entries.map(([pin]) => pin));
-  for (const pin of allowed?.required ?? []) {
-    if (given.has(pin)) continue;
+  const clear = pins.size === entries.length;
+  const complete = checkComplete(place, new Set(entries.map(([pin]) => pin)), allowed);
+  return { pins, clear, good: clear && known && complete };
+}
+
+function isKnown(pin: string, place: Place, { required, optional }: AllowedPins): boolean {
+  if (optional === "any") return checkHeading(place, pin);
+  const known = [...required, ...optional];
+  if (known.includes(pin)) return true;
+  const hint = meaning(pin, known);
+  const names = known.length === 0 ? "It has none." : `Its pins are ${known.join(", ")}.`;
+  const end = hint === "." ? `. ${names}` : hint;
+  place.fault("unknownPin", `There is no pin ${quoted(pin)}${end}`);
+  return false;
+}
+
+function checkComplete(place: Place, given: ReadonlySet<string>, allowed: AllowedPins): boolean {
+  const missing = allowed.required.filter((pin) => !given.has(pin));
+  for (const pin of missing) {
     const message = `The pin "${pin}" is missing; name its net, or write null for none.`;
     place.fault("missingPin", message);
-    good = false;
   }
-  return { pins, good };
+  return missing.length === 0;
 }

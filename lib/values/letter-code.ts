@@ -2,7 +2,7 @@ import type { Quantity } from "./quantity";
 import { allUnits } from "./quantity";
 import { prefixExponents } from "./si-prefix";
 
-/** A letter code taken apart: `4K7J` is digits "4.7", exponent 3, tolerance letter "J". */
+/** A letter code taken apart: `4K7J` is decimal "4.7", exponent 3, tolerance letter "J". */
 export interface LetterCode {
   readonly decimal: string;
   readonly exponent: number;
@@ -78,15 +78,14 @@ export function readLetterCode(text: string, quantity: Quantity): LetterCode | n
   const tolerance = infix === null ? rest : (last ?? "");
   const fraction = infix === null ? "" : rest;
   if (tolerance !== "") {
-    if (own === undefined || !TOLERANCES.has(tolerance)) return null;
     const couldBeUnit =
       infix === null
         ? prefixExponents.has(letter) && allUnits.has(tolerance)
         : quantity === "capacitance" && tolerance === "F";
-    if (couldBeUnit) return null;
+    if (own === undefined || couldBeUnit || !TOLERANCES.has(tolerance)) return null;
   }
   return {
-    decimal: `${whole === "" ? "0" : whole}.${fraction === "" ? "0" : fraction}`,
+    decimal: `${whole}.${fraction}`,
     exponent,
     toleranceLetter: tolerance === "" ? null : tolerance,
   };

@@ -1,10 +1,17 @@
+const LONGEST = 40;
+/** A hint is not worth comparing with every part of a large board. */
+const MOST_COMPARED = 500;
+
 /** The word of the list that a misspelt one most likely means; null where none is near. */
-export function nearestWord(word: string, words: Iterable<string>): string | null {
+function nearestWord(word: string, words: Iterable<string>): string | null {
   const allowed = Math.min(2, Math.floor(word.length / 2));
-  if (word.length > 40) return null;
+  if (word.length > LONGEST) return null;
   let nearest: string | null = null;
   let least = allowed + 1;
+  let compared = 0;
   for (const candidate of words) {
+    compared += 1;
+    if (compared > MOST_COMPARED) break;
     if (Math.abs(candidate.length - word.length) >= least) continue;
     const edits = distance(word.toLowerCase(), candidate.toLowerCase());
     if (edits < least) {
@@ -15,10 +22,10 @@ export function nearestWord(word: string, words: Iterable<string>): string | nul
   return nearest;
 }
 
-/** A hint to end a sentence with: `; did you mean "gain"?` or nothing. */
+/** The end of a sentence about a word that is not known: `; did you mean "gain"?`, or a full stop. */
 export function meaning(word: string, words: Iterable<string>): string {
   const nearest = nearestWord(word, words);
-  return nearest === null ? "" : `; did you mean "${nearest}"?`;
+  return nearest === null ? "." : `; did you mean "${nearest}"?`;
 }
 
 /** Insertions, deletions and replacements between two words (Wagner and Fischer 1974). */
