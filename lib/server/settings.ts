@@ -13,7 +13,9 @@ export interface Settings {
 const SHORTEST_SECRET = 32;
 
 /** Reads the environment. @throws with the name of the setting that is missing or wrong */
-export function settings(environment: NodeJS.ProcessEnv = process.env): Settings {
+export function settings(
+  environment: Readonly<Record<string, string | undefined>> = process.env,
+): Settings {
   const secret = environment["AMPERSIGN_SECRET"] ?? "";
   if (secret.length < SHORTEST_SECRET) {
     throw new Error(`AMPERSIGN_SECRET must have at least ${SHORTEST_SECRET} characters.`);

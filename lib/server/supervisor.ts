@@ -72,7 +72,9 @@ async function runPrograms(
   const url = await readiness(server, stopping);
   if (url === undefined) {
     await stopProgram(server);
-    return stopping.aborted ? 0 : 1;
+    if (stopping.aborted) return 0;
+    say("The server did not start; the reason stands above.");
+    return 1;
   }
   say(welcome(url));
   // First the server, so that nobody is told "saved" by one that is about to go; then the worker; then the database.
