@@ -1,0 +1,63 @@
+import type { Factor } from "./factor";
+import { solve, solveTransposed } from "./solve";
+import type { SparseMatrix } from "./sparse-matrix";
+
+/** Unit roundoff of doubles. */
+const UNIT_ROUNDOFF = 2 ** -53;
+const MOST_STEPS = 5;
+
+/**
+ * Skeel's condition of a solution, max_i (|A^-1| |A| |x|)_i / max |x| (Skeel 1980), estimated by
+ * Hager's and Higham's method on diag(|A| |x|) A^-T. Unlike the 1-norm condition it does not depend
+ * on the scaling of rows, so amperes beside volts do not alarm it.
+ */
+export function skeelCondition(matrix: SparseMatrix, factor: Factor, x: Float64Array): number {
+  const { n } = matrix.pattern;
+  const largest = x.reduce((most, value) => Math.max(most, Math.abs(value)), 0);
+  if (n === 0 || largest === 0) return 1;
+  const weight = absoluteProduct(matrix, x);
+  let probe = new Float64Array(n).fill(1 / n);
+  let estimate = 0;
+  let last = -1;
+  for (let step = 0; step < MOST_STEPS; step++) {
+    const y = solveTransposed(factor, probe).map((value, i) => value * (weight[i] ?? 0));
+    const norm = y.reduce((sum, value) => sum + Math.abs(value), 0);
+    if (norm <= estimate) break;
+    estimate = norm;
+    const z = solve(
+      factor,
+      y.map((value, i) => (value >= 0 ? 1 : -1) * (weight[i] ?? 0)),
+    );
+    const top = indexOfLargest(z);
+    if (top === last) break;
+    last = top;
+    probe = new Float64Array(n);
+    probe[top] = 1;
+  }
+  return estimate / largest;
+}
+
+/** A relative bound on the error of the solved unknowns. */
+export function errorBound(matrix: SparseMatrix, factor: Factor, x: Float64Array): number {
+  return UNIT_ROUNDOFF * skeelCondition(matrix, factor, x);
+}
+
+function absoluteProduct(matrix: SparseMatrix, x: Float64Array): Float64Array {
+  const { n, columnStart, rowIndex } = matrix.pattern;
+  const product = new Float64Array(n);
+  for (let column = 0; column < n; column++) {
+    const size = Math.abs(x[column] ?? 0);
+    for (let p = columnStart[column] ?? 0; p < (columnStart[column + 1] ?? 0); p++) {
+      const row = rowIndex[p] ?? 0;
+      product[row] = (product[row] ?? 0) + Math.abs(matrix.values[p] ?? 0) * size;
+    }
+  }
+  return product;
+}
+
+function indexOfLargest(values: Float64Array): number {
+  let top = 0;
+  for (let i = 1; i < values.length; i++)
+    if (Math.abs(values[i] ?? 0) > Math.abs(values[top] ?? 0)) top = i;
+  return top;
+}
