@@ -76,11 +76,11 @@ export class Place {
     const { value } = this;
     if (typeof value !== "number") return this.#wrong("a whole number");
     if (!Number.isSafeInteger(value)) {
-      return this.fault("badValue", `${value} is not a whole number.`);
+      return this.fault("badValue", `The number ${value} is not a whole one.`);
     }
     if (value >= least && value <= most) return value;
     const bounds = `at least ${least} and at most ${most}`;
-    return this.fault("outOfRange", `${value} is out of range; it must be ${bounds}.`);
+    return this.fault("outOfRange", `The number ${value} is out of range; it must be ${bounds}.`);
   }
 
   /** A value of this quantity that names no tolerance. */
@@ -96,7 +96,7 @@ export class Place {
     const read = this.#value(quantity);
     if (read === null) return null;
     if (!within(range, read.value)) {
-      const found = `${this.#written()} is out of range`;
+      const found = `The value ${this.#written()} is out of range`;
       const { name } = quantities[quantity];
       return this.fault("outOfRange", `${found}; ${name} here must be ${rangeInWords(range)}.`);
     }

@@ -7,14 +7,16 @@ interface DatasheetPoint {
   readonly voltage: number;
 }
 
+const ROUNDS = 8;
+
 /** k T / q at 25 °C, V, with the exact k and q of the SI (2019). */
 const THERMAL_VOLTAGE = (1.380649e-23 * 298.15) / 1.602176634e-19;
 
 /**
  * The junction numbers that pass through datasheet points at 25 °C: from two points, saturation current and
  * emission coefficient; from more, also the series resistance, by least squares in the voltage
- * v = n Vt ln(i / Is) + Rs i, which is linear in n, n ln Is and Rs. Forward currents exceed Is so far that
- * the law's "- 1" is below rounding.
+ * v = n Vt ln((i + Is) / Is) + Rs i. With Is in the sum taken from the round before, this is linear in n,
+ * n ln Is and Rs; as Is is far below the currents, a few rounds settle it.
  */
 export function readFit(place: Place): ReadonlyMap<string, ParameterValue> | null {
   const items = place.items();
@@ -25,11 +27,14 @@ export function readFit(place: Place): ReadonlyMap<string, ParameterValue> | nul
   if (currents.size < 2 || currents.size < points.length) {
     return place.fault("badValue", "A fit needs two points or more, each at another current.");
   }
-  const withResistance = points.length > 2 ? fitThree(points) : null;
-  const { slope, offset, resistance } =
-    withResistance !== null && withResistance.resistance >= 0 ? withResistance : fitTwo(points);
-  const saturationCurrent = Math.exp(-offset / slope);
-  if (!(slope > 0) || !(saturationCurrent > 0)) {
+  let saturationCurrent = 0;
+  let line = fitLine(points, saturationCurrent);
+  for (let round = 0; round < ROUNDS; round += 1) {
+    saturationCurrent = Math.exp(-line.offset / line.slope);
+    line = fitLine(points, saturationCurrent);
+  }
+  const { slope, resistance } = line;
+  if (!(slope > 0 && saturationCurrent > 0 && Number.isFinite(saturationCurrent))) {
     return place.fault("badValue", "No junction passes through these points; check them.");
   }
   return new Map([
@@ -55,17 +60,24 @@ interface Line {
   readonly resistance: number;
 }
 
-/** v = slope ln i + offset, by least squares. */
-function fitTwo(points: readonly DatasheetPoint[]): Line {
-  const logs = points.map((point) => Math.log(point.current));
+/** The line through the points; without a series resistance where a negative one would fit best. */
+function fitLine(points: readonly DatasheetPoint[], saturationCurrent: number): Line {
+  const logs = points.map((point) => Math.log(point.current + saturationCurrent));
+  const withResistance = points.length > 2 ? fitThree(points, logs) : null;
+  return withResistance !== null && withResistance.resistance >= 0
+    ? withResistance
+    : fitTwo(points, logs);
+}
+
+/** v = slope log + offset, by least squares. */
+function fitTwo(points: readonly DatasheetPoint[], logs: readonly number[]): Line {
   const voltages = points.map((point) => point.voltage);
   const slope = covariance(logs, voltages) / covariance(logs, logs);
   return { slope, offset: mean(voltages) - slope * mean(logs), resistance: 0 };
 }
 
-/** v = slope ln i + resistance i + offset, by least squares. */
-function fitThree(points: readonly DatasheetPoint[]): Line {
-  const logs = points.map((point) => Math.log(point.current));
+/** v = slope log + resistance i + offset, by least squares. */
+function fitThree(points: readonly DatasheetPoint[], logs: readonly number[]): Line {
   const currents = points.map((point) => point.current);
   const voltages = points.map((point) => point.voltage);
   const a = covariance(logs, logs);

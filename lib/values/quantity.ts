@@ -70,8 +70,8 @@ export const quantities = {
     "V/ms": { exponent: 3, prefixed: true },
     "V/us": { exponent: 6, prefixed: true },
   }),
-  thermalResistance: row("a thermal resistance", { "K/W": si, "°C/W": plain }),
-  dissipation: row("a dissipation constant", { "W/K": si, "W/°C": si }),
+  thermalResistance: rowWithoutPrefix("a thermal resistance", { "K/W": si, "°C/W": plain }),
+  dissipation: rowWithoutPrefix("a dissipation constant", { "W/K": si, "W/°C": si }),
 } satisfies Readonly<Record<string, QuantityRow>>;
 
 /** Units that a file may write although no quantity of ours is measured in them alone. */
