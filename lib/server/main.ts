@@ -17,7 +17,7 @@ const REQUEST_MS = 60_000;
 const KEEP_ALIVE_MS = 75_000;
 const CLOSE_MS = 5_000;
 
-/** Next would add an upgrade listener of its own to a real server and cut our sockets. */
+/** Next listens for upgrades on the server it is given, and would cut our sockets: it gets one that never listens. */
 const decoy = new Server();
 const pages = next({
   dev: development,
@@ -28,8 +28,9 @@ const pages = next({
 });
 await pages.prepare();
 const handlePage = pages.getRequestHandler();
-const handlePageUpgrade = pages.getUpgradeHandler();
 const sockets = designSockets();
+/** The server forgets a connection once it is upgraded, but does not close before it has ended. */
+const upgraded = new Set<Duplex>();
 
 const server = createServer(
   { headersTimeout: HEADERS_MS, requestTimeout: REQUEST_MS, keepAliveTimeout: KEEP_ALIVE_MS },
@@ -48,9 +49,11 @@ server.on("upgrade", (request: IncomingMessage, socket: Duplex, head: Buffer) =>
   const path = pathOf(request);
   noteOrigin(request);
   socket.on("error", (error) => log.debug({ error, path }, "socket"));
+  upgraded.add(socket);
+  socket.once("close", () => upgraded.delete(socket));
   if (path.startsWith("/doc/")) sockets.handleUpgrade(request, socket, head);
   else if (development && path.startsWith("/_next/")) {
-    handlePageUpgrade(request, socket, head).catch(() => socket.destroy());
+    decoy.emit("upgrade", request, socket, head);
   } else socket.end("HTTP/1.1 404 Not Found\r\nConnection: close\r\nContent-Length: 0\r\n\r\n");
 });
 
@@ -78,6 +81,7 @@ async function stop(): Promise<void> {
   server.close();
   server.closeIdleConnections();
   await sockets.close();
+  for (const socket of upgraded) socket.destroy();
   const late = setTimeout(() => server.closeAllConnections(), CLOSE_MS);
   await closed;
   clearTimeout(late);
