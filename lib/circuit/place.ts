@@ -164,7 +164,7 @@ function listed(words: readonly string[]): string {
 }
 
 function typeInWords(value: unknown): string {
-  if (value === null) return "null";
+  if (value === null || value === undefined) return String(value);
   if (Array.isArray(value)) return "a list";
   if (typeof value === "string") return "a text";
   if (typeof value === "object") return "an object";

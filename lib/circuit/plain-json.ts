@@ -25,12 +25,14 @@ function visit(value: unknown, at: string, depth: number, problems: FileProblem[
   } else if (typeof value === "object") {
     visitMembers(value, at, depth, problems);
   } else {
-    const message = `JSON has no ${typeof value}; leave it out.`;
+    const message = `JSON has nothing for ${typeof value}; leave the key out.`;
     problems.push({ code: "wrongType", message, at });
   }
 }
 
 function visitMembers(value: object, at: string, depth: number, problems: FileProblem[]): void {
+  // Once too deep, nothing more is worth telling; an object that holds itself would never end.
+  if (problems.at(-1)?.code === "tooLarge") return;
   if (depth > DEEPEST) {
     const message = `The file is nested more than ${DEEPEST} deep here; nothing in it needs that.`;
     problems.push({ code: "tooLarge", message, at });

@@ -103,6 +103,6 @@ export function findPart(
 /** Reports that a part has no such parameter. */
 export function noSuchParameter(place: Place, part: BlockPart, name: string): null {
   const hint = meaning(name, Object.keys(catalogue[part.kind].parameters));
-  const message = `A ${part.kind} has no parameter ${quoted(name)}${hint}`;
+  const message = `The kind "${part.kind}" has no parameter ${quoted(name)}${hint}`;
   return place.fault("noSuchParam", message);
 }

@@ -62,7 +62,7 @@ export function readParameters(kind: Kind, sources: Sources): ReadParameters | n
     const value = given.get(name)?.read?.value ?? fitted?.get(name) ?? defaultOf(parameter);
     if (value !== undefined) values.set(name, value);
     else if (!given.has(name)) {
-      const message = `A ${kind} needs the parameter "${name}"; add it.`;
+      const message = `The kind "${kind}" needs the parameter "${name}"; add it.`;
       (sources.params ?? sources.part).fault("missingKey", message);
     }
     if (fitted?.has(name) && given.has(name)) {
@@ -92,7 +92,7 @@ function readGiven(
     if (parameter !== undefined)
       return [[name, { place, read: readParameter(parameter, place) }] as const];
     const hint = meaning(name, known.keys());
-    const message = `A ${kind} has no parameter ${quoted(name)}${hint}`;
+    const message = `The kind "${kind}" has no parameter ${quoted(name)}${hint}`;
     place.fault("unknownKey", message);
     return [];
   });
