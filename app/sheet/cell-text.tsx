@@ -1,0 +1,40 @@
+import { textWidth } from "../../lib/sheet/lettering";
+
+/** Faces of the title block against the narrow one that widths are measured in. */
+const FACES = { tc: 0.95, tv: 1.05, tb: 1.36, tm: 1.22 } as const;
+
+interface CellTextProps {
+  readonly look: keyof typeof FACES;
+  readonly x: number;
+  readonly y: number;
+  readonly room: number;
+  readonly children: string;
+  readonly anchor?: "start" | "end";
+  readonly red?: boolean;
+}
+
+/** Lettering in a ruled cell. What does not fit is cut with an ellipsis, and stands in full in its title. */
+export function CellText({
+  look,
+  x,
+  y,
+  room,
+  children,
+  anchor = "start",
+  red = false,
+}: CellTextProps) {
+  const text = cut(children, room / FACES[look]);
+  return (
+    <text className={red ? `${look} red` : look} x={x} y={y} textAnchor={anchor}>
+      {text}
+      {text !== children && <title>{children}</title>}
+    </text>
+  );
+}
+
+function cut(text: string, room: number): string {
+  if (textWidth(text, "ref") <= room) return text;
+  const letters = [...text];
+  while (letters.length > 1 && textWidth(`${letters.join("")}…`, "ref") > room) letters.pop();
+  return `${letters.join("").trimEnd()}…`;
+}
