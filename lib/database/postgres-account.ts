@@ -1,13 +1,5 @@
 import { createHash } from "node:crypto";
-import {
-  chmodSync,
-  chownSync,
-  cpSync,
-  existsSync,
-  mkdirSync,
-  readFileSync,
-  statSync,
-} from "node:fs";
+import { chmodSync, chownSync, existsSync, mkdirSync, readFileSync, statSync } from "node:fs";
 import { dirname, join, parse, resolve } from "node:path";
 
 /** The account that Postgres runs under; absent where the present one will do. */
@@ -17,7 +9,7 @@ export interface PostgresAccount {
 }
 
 /** Where root keeps what the other account has to reach, if the checkout lies in a closed folder such as /root. */
-const OPEN_FOLDER = "/var/lib/ampersign";
+export const OPEN_FOLDER = "/var/lib/ampersign";
 
 /**
  * Postgres refuses to run as root, so root hands it to `postgres`, or to `nobody` where there is no such account.
@@ -36,28 +28,13 @@ export function postgresAccount(): PostgresAccount | undefined {
 }
 
 /** Whether every folder above the path lets other accounts pass. */
-function isReachable(path: string): boolean {
+export function isReachable(path: string): boolean {
   let folder = dirname(resolve(path));
   for (;;) {
     if (existsSync(folder) && (statSync(folder).mode & 0o001) === 0) return false;
     if (folder === parse(folder).root) return true;
     folder = dirname(folder);
   }
-}
-
-/** The folder of Postgres's own files (bin, lib, share), copied out if its account could not reach it. */
-export function reachableProgram(native: string, account: PostgresAccount | undefined): string {
-  if (account === undefined || isReachable(join(native, "bin", "postgres"))) return native;
-  const digest = createHash("sha256")
-    .update(readFileSync(join(native, "bin", "initdb")))
-    .digest("hex");
-  const copy = join(OPEN_FOLDER, `postgres-${digest.slice(0, 12)}`);
-  if (!existsSync(join(copy, "copied"))) {
-    mkdirSync(copy, { recursive: true, mode: 0o755 });
-    cpSync(native, copy, { recursive: true, verbatimSymlinks: true });
-    mkdirSync(join(copy, "copied"));
-  }
-  return copy;
 }
 
 /** A data folder that its account can reach, made if absent: the one wished for, or one under {@link OPEN_FOLDER}. */

@@ -53,7 +53,7 @@ if (!(await isPortFree(port))) {
 const development = process.argv.includes("--dev");
 process.chdir(ROOT);
 process.env.NEXT_TELEMETRY_DISABLED = "1";
-if (!isInstalled(ROOT)) run("Installing", "npm", ["ci", "--no-audit", "--no-fund"]);
+if (!isInstalled(ROOT)) run("Installing", "npm", ["ci", "--loglevel=error"]);
 run(
   "Building what changed",
   process.execPath,
