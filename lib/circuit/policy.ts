@@ -1,7 +1,8 @@
 import type { Place } from "./place";
+import { checkRule } from "./read-rule";
 
 /** The derating policies that a file may name. */
-export const policyIds = [
+const POLICY_IDS = [
   "mil-std-975m",
   "navy-sd-18",
   "rac-severe",
@@ -11,7 +12,7 @@ export const policyIds = [
 ] as const;
 
 /** The policy of a file that names none. */
-export const defaultPolicy = "common-practice";
+const DEFAULT_POLICY = "common-practice";
 
 /** A policy by id, with what the file adds to it; `stress` reads the rules. */
 export interface ReadPolicy {
@@ -20,18 +21,21 @@ export interface ReadPolicy {
   readonly rules: readonly unknown[];
 }
 
-/** Reads the choice of a derating policy. */
-export function readPolicy(place: Place | null): ReadPolicy {
+/** Reads the choice of a derating policy; `kinds` are the part kinds that its rules may name. */
+export function readPolicy(place: Place | null, kinds: readonly string[]): ReadPolicy {
   const fields = place?.fields(["use", "variant", "rules"]) ?? null;
-  const use = fields?.optional("use")?.choice(policyIds);
+  const use = fields?.optional("use")?.choice(POLICY_IDS);
   const rules = fields?.optional("rules")?.items() ?? [];
+  const ids = new Set<unknown>();
   for (const rule of rules) {
-    const [, id] = rule.entries()?.find(([key]) => key === "id") ?? [];
-    if (id === undefined) rule.fault("missingKey", 'A rule needs an "id".');
-    else id.text();
+    checkRule(rule, kinds);
+    const id = rule.member("id");
+    if (ids.has(id.value))
+      id.fault("duplicateName", "Another rule has this id; give each its own.");
+    if (id.value !== undefined) ids.add(id.value);
   }
   return {
-    use: use ?? defaultPolicy,
+    use: use ?? DEFAULT_POLICY,
     variant: fields?.optional("variant")?.value ?? null,
     rules: rules.map((rule) => rule.value),
   };

@@ -12,6 +12,7 @@ import { quoted } from "../values/read-value";
 import { fail, ok, type Result } from "../values/result";
 import { assemblePart } from "./assemble-part";
 import type { Block, Blocks } from "./block";
+import { kinds } from "./catalogue";
 import { checkContainment } from "./check-containment";
 import type { Circuit, Condition } from "./circuit";
 import { circuitAddresses } from "./circuit-addresses";
@@ -80,7 +81,7 @@ function readFile(file: Place): Undigested | null {
     reference: held,
     nets: inCodePointOrder([...nets.fitted]),
     limits: limits === null ? [] : readLimits(limits, addresses, names),
-    policy: readPolicy(fields.optional("policy")),
+    policy: readPolicy(fields.optional("policy"), kinds),
   };
   // Parts are put together only where everything was read: what is missing has no value to give.
   if (flat === null || file.reading.problems.length > 0) return null;
