@@ -1,4 +1,4 @@
-import { canonicalDigest } from "./canonical";
+import { digest } from "../circuit/digest";
 
 /** One row of the append-only audit log, chained by hash to the one before. */
 export interface AuditEntry {
@@ -20,7 +20,7 @@ export const FIRST_PREVIOUS_HASH = `sha256:${"0".repeat(64)}`;
 /** SHA-256 over the RFC 8785 form of all fields but the hash itself. */
 export function auditHash(entry: Omit<AuditEntry, "hash">): string {
   const { seq, at, actor, action, subject, payload, previousHash } = entry;
-  return canonicalDigest({ seq, at, actor, action, subject, payload, previousHash });
+  return digest({ seq, at, actor, action, subject, payload, previousHash });
 }
 
 /** What breaks the chain first; null when it holds. Entries may start anywhere, but must be consecutive. */

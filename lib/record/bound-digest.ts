@@ -1,5 +1,4 @@
-import type { Decision, Finding } from "../review/review-state";
-import { canonicalDigest } from "./canonical";
+import { digest } from "../circuit/digest";
 
 /** The things a signature stands on. Digests are `sha256:…`; null where there is none (a first issue has no base). */
 export interface BoundThings {
@@ -8,8 +7,8 @@ export interface BoundThings {
   /** Digest of the solver's whole result. */
   readonly results: string;
   readonly policy: unknown;
-  readonly findings: readonly Finding[];
-  readonly decisions: readonly Decision[];
+  readonly findings: readonly { readonly id: string }[];
+  readonly decisions: readonly { readonly id: string; readonly kind: string }[];
 }
 
 /** The digest of each bound thing, so that a refusal can say which one changed. */
@@ -31,9 +30,9 @@ export function boundDigests(things: BoundThings): BoundDigests {
     circuit: things.circuit,
     base: things.base,
     results: things.results,
-    policy: canonicalDigest(things.policy),
-    findings: canonicalDigest([...things.findings].sort(byId)),
-    decisions: canonicalDigest(
+    policy: digest(things.policy),
+    findings: digest([...things.findings].sort(byId)),
+    decisions: digest(
       things.decisions
         .filter((decision) => decision.kind !== "signature" && decision.kind !== "release")
         .toSorted(byId),
@@ -43,7 +42,7 @@ export function boundDigests(things: BoundThings): BoundDigests {
 
 /** The one digest that a signature stores: over all bound digests and the signature's meaning. */
 export function boundDigest(digests: BoundDigests, meaning: string): string {
-  return canonicalDigest({ ...digests, meaning });
+  return digest({ ...digests, meaning });
 }
 
 function byId(a: { readonly id: string }, b: { readonly id: string }): number {

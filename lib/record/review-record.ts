@@ -1,11 +1,11 @@
 import type { CircuitFile } from "../circuit/circuit-file";
+import { digest } from "../circuit/digest";
 import type { Comparison } from "../comparison/comparison";
 import type { ExitCriterion } from "../review/exit-criterion";
 import type { Decision, Finding, Role } from "../review/review-state";
 import type { CircuitResult } from "../stress/circuit-result";
 import type { AuditEntry } from "./audit-chain";
 import { type BoundDigests, boundDigests } from "./bound-digest";
-import { canonicalDigest } from "./canonical";
 
 /** A person who took part: name and function as they stood, and whether independent of the authors. */
 export interface RecordPerson {
@@ -60,7 +60,7 @@ export type RecordInputs = Omit<
 /** Builds the record: adds the digests of what the signatures are bound to. */
 export function buildRecord(inputs: RecordInputs): ReviewRecord {
   const { policy, ...kept } = inputs;
-  const resultDigest = canonicalDigest(inputs.result);
+  const resultDigest = digest(inputs.result);
   return {
     ampersignRecord: 1,
     ...kept,

@@ -1,6 +1,8 @@
 import { calculateJwkThumbprint, FlattenedSign, flattenedVerify, importJWK, type JWK } from "jose";
+import { digest } from "../circuit/digest";
 import { fail, ok, type Result } from "../values/result";
-import { canonicalBytes, canonicalDigest } from "./canonical";
+import { canonicalBytes } from "./canonical";
+import type { CheckableSeal } from "./read-record";
 import type { ReviewRecord } from "./review-record";
 
 /**
@@ -33,7 +35,7 @@ export async function sealRecord(record: ReviewRecord, privateKey: JWK): Promise
   };
   return {
     record,
-    digest: canonicalDigest(record),
+    digest: digest(record),
     seal: {
       protected: signed.protected ?? "",
       signature: signed.signature,
@@ -45,9 +47,9 @@ export async function sealRecord(record: ReviewRecord, privateKey: JWK): Promise
 
 /** Checks digest and signature of a sealed record. The failure says which does not hold. */
 export async function checkSeal(
-  sealed: SealedRecord,
+  sealed: CheckableSeal,
 ): Promise<Result<{ readonly fingerprint: string }, "digest" | "signature">> {
-  if (canonicalDigest(sealed.record) !== sealed.digest) return fail("digest");
+  if (digest(sealed.record) !== sealed.digest) return fail("digest");
   const payload = base64url(canonicalBytes(sealed.record));
   try {
     const key = await importJWK(sealed.seal.key, "EdDSA");

@@ -1,12 +1,12 @@
+import { digest } from "../circuit/digest";
 import { compare } from "../comparison/compare";
 import { readCircuitFile } from "../kinds/read-circuit";
 import { judge } from "../stress/judge";
 import { auditChainFault } from "./audit-chain";
 import { type BoundDigests, boundDigest, boundDigests } from "./bound-digest";
-import { canonicalDigest } from "./canonical";
 import { numberDifferences } from "./number-differences";
-import type { RecordRevision, ReviewRecord } from "./review-record";
-import { checkSeal, type SealedRecord } from "./seal";
+import type { CheckableRecord, CheckableSeal } from "./read-record";
+import { checkSeal } from "./seal";
 
 /** One thing that was checked, and what was found. */
 export interface RecordCheck {
@@ -38,7 +38,7 @@ export interface RecordVerdict {
  * person's signature is bound to, the audit chain; then solves both circuits again and compares every
  * number. All checks are made and told, not only the first that fails.
  */
-export async function verifyRecord(sealed: SealedRecord): Promise<RecordVerdict> {
+export async function verifyRecord(sealed: CheckableSeal): Promise<RecordVerdict> {
   const { record } = sealed;
   const seal = await checkSeal(sealed);
   const digestHolds = seal.ok || seal.error === "signature";
@@ -68,31 +68,38 @@ export async function verifyRecord(sealed: SealedRecord): Promise<RecordVerdict>
   };
 }
 
-function revisionsOf(record: ReviewRecord): readonly RecordRevision[] {
+function revisionsOf(record: CheckableRecord): readonly CheckableRecord["revision"][] {
   return record.base === null ? [record.revision] : [record.revision, record.base];
 }
 
-function circuitsCheck(record: ReviewRecord): RecordCheck {
+function circuitsCheck(record: CheckableRecord): RecordCheck {
   const wrong = revisionsOf(record).find(
-    (revision) => canonicalDigest(revision.circuit) !== revision.digest,
+    (revision) => digest(revision.circuit) !== revision.digest,
   );
   return wrong === undefined
     ? held("circuits", "Each circuit has its own digest.")
     : broken("circuits", `The circuit of Rev ${wrong.letter} is not the one its digest names.`);
 }
 
-function boundNow(record: ReviewRecord): BoundDigests {
+function boundNow(record: CheckableRecord): BoundDigests {
   return boundDigests({
     circuit: record.revision.digest,
     base: record.base?.digest ?? null,
-    results: canonicalDigest(record.result),
-    policy: record.revision.circuit.policy ?? null,
+    results: digest(record.result),
+    policy: policyOf(record.revision.circuit),
     findings: record.findings,
     decisions: record.decisions,
   });
 }
 
-function boundCheck(record: ReviewRecord): RecordCheck {
+/** The policy as the circuit file chooses it; null where it leaves the default. */
+export function policyOf(circuit: unknown): unknown {
+  return typeof circuit === "object" && circuit !== null && "policy" in circuit
+    ? circuit.policy
+    : null;
+}
+
+function boundCheck(record: CheckableRecord): RecordCheck {
   const now: Readonly<Record<string, string | null>> = { ...boundNow(record) };
   const wrong = Object.entries(record.bound).find(([name, digest]) => now[name] !== digest);
   return wrong === undefined
@@ -103,10 +110,11 @@ function boundCheck(record: ReviewRecord): RecordCheck {
     : broken("bound", `The ${wrong[0]} are not those that were signed.`);
 }
 
-function signaturesCheck(record: ReviewRecord): RecordCheck {
+function signaturesCheck(record: CheckableRecord): RecordCheck {
   const now = boundNow(record);
-  const signatures = record.decisions.filter((decision) => decision.kind === "signature");
-  const ours = signatures.filter((signature) => signature.revision === record.revision.letter);
+  const ours = record.decisions
+    .filter(isSignature)
+    .filter((signature) => signature.revision === record.revision.letter);
   const wrong = ours.find(
     (signature) => signature.boundDigest !== boundDigest(now, signature.meaning),
   );
@@ -120,14 +128,20 @@ function signaturesCheck(record: ReviewRecord): RecordCheck {
   return held("signatures", `${ours.length} signatures, each bound to what stands here.`);
 }
 
-function auditCheck(record: ReviewRecord): RecordCheck {
+type Signature = Extract<CheckableRecord["decisions"][number], { boundDigest: string }>;
+
+function isSignature(decision: CheckableRecord["decisions"][number]): decision is Signature {
+  return decision.kind === "signature" && "boundDigest" in decision;
+}
+
+function auditCheck(record: CheckableRecord): RecordCheck {
   const fault = auditChainFault(record.audit);
   return fault === null
     ? held("audit", `${record.audit.length} audit entries, chained without a gap.`)
     : broken("audit", `The audit chain is broken: ${fault}.`);
 }
 
-function solvedAgainChecks(record: ReviewRecord): readonly RecordCheck[] {
+function solvedAgainChecks(record: CheckableRecord): readonly RecordCheck[] {
   const proposed = readCircuitFile(record.revision.circuit);
   if (!proposed.ok)
     return [
