@@ -23,7 +23,10 @@ export async function startWorkspace(): Promise<WorkspaceProcess> {
     stdio: ["ignore", "pipe", "inherit"],
     env: { ...environment, PORT: "0", AMPERSIGN_DATA: folder },
   });
-  const url = await readyAddress(child);
+  const url = await readyAddress(child).catch((error: unknown) => {
+    rmSync(folder, { recursive: true, force: true });
+    throw error;
+  });
   const { pid } = child;
   if (pid === undefined) throw new Error("The workspace did not start.");
   return {
