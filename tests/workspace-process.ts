@@ -10,21 +10,31 @@ export interface WorkspaceProcess {
   readonly url: string;
   /** Process that started the others. */
   readonly pid: number;
-  /** Ends everything in order and removes the data. */
+  /** Ends everything in order and removes the data, if the folder was its own. */
   stop(): Promise<void>;
 }
 
-/** Starts one on a free port; builds what changed first. @throws with all it said, when it ends before it is ready */
-export async function startWorkspace(): Promise<WorkspaceProcess> {
-  const folder = mkdtempSync(join(tmpdir(), "ampersign-workspace-"));
-  chmodSync(folder, 0o755);
+/**
+ * Starts one on a free port; installs and builds what is missing first.
+ * @param given a checkout other than this one, and a data folder to keep
+ * @throws with all it said, when it ends before it is ready
+ */
+export async function startWorkspace(
+  given: { readonly checkout?: string; readonly data?: string } = {},
+): Promise<WorkspaceProcess> {
+  const folder = given.data ?? mkdtempSync(join(tmpdir(), "ampersign-workspace-"));
+  if (given.data === undefined) chmodSync(folder, 0o755);
+  const remove = () => {
+    if (given.data === undefined) rmSync(folder, { recursive: true, force: true });
+  };
   const { DATABASE_URL: _, ...environment } = process.env;
   const child = spawn(process.execPath, ["lib/server/start.mjs"], {
+    cwd: given.checkout ?? process.cwd(),
     stdio: ["ignore", "pipe", "inherit"],
     env: { ...environment, PORT: "0", AMPERSIGN_DATA: folder },
   });
   const url = await readyAddress(child).catch((error: unknown) => {
-    rmSync(folder, { recursive: true, force: true });
+    remove();
     throw error;
   });
   const { pid } = child;
@@ -38,7 +48,7 @@ export async function startWorkspace(): Promise<WorkspaceProcess> {
         child.kill("SIGTERM");
         await gone;
       }
-      rmSync(folder, { recursive: true, force: true });
+      remove();
     },
   };
 }

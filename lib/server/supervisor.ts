@@ -9,7 +9,10 @@ import { type MigrationFailure, migrate } from "../database/migrate";
 import { isRunning, type Program, startProgram, stopProgram } from "./child-process";
 import { demoPeople } from "./demo-people";
 
-const RESTART_AFTER_MS = 1000;
+/** Doubles with each early end, so that a program that cannot run does not take the machine with it. */
+const RESTART_AFTER_MS = 500;
+const LONGEST_PAUSE_MS = 30_000;
+const EARLY_MS = 60_000;
 
 /** @returns the exit code, once everything has ended */
 export async function supervise(given: {
@@ -102,14 +105,17 @@ async function keepRunning(
   started?: ChildProcess,
 ): Promise<void> {
   let child = started ?? startProgram(program);
+  let wait = RESTART_AFTER_MS;
   while (!stopping.aborted) {
+    const begun = Date.now();
     await endOf(child, stopping);
     if (stopping.aborted) break;
+    wait = Date.now() - begun < EARLY_MS ? Math.min(2 * wait, LONGEST_PAUSE_MS) : RESTART_AFTER_MS;
     say(
       `${program.name} ended unexpectedly (${child.signalCode ?? child.exitCode}); starting it again.`,
     );
-    await pause(RESTART_AFTER_MS);
-    child = startProgram(program);
+    await pause(wait, undefined, { signal: stopping }).catch(() => undefined);
+    if (!stopping.aborted) child = startProgram(program);
   }
   await stopProgram(child);
 }
