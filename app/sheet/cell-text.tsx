@@ -1,7 +1,12 @@
 import { textWidth } from "../../lib/sheet/lettering";
 
-/** Faces of the title block against the narrow one that widths are measured in. */
-const FACES = { tc: 0.95, tv: 1.05, tb: 1.36, tm: 1.22 } as const;
+/** Faces of the title block against the lettering that widths are measured in. */
+const FACES = {
+  tc: { style: "ref", factor: 0.95 },
+  tv: { style: "ref", factor: 1.05 },
+  tb: { style: "ref", factor: 1.29 },
+  tm: { style: "number", factor: 1 },
+} as const;
 
 interface CellTextProps {
   readonly look: keyof typeof FACES;
@@ -23,7 +28,7 @@ export function CellText({
   anchor = "start",
   red = false,
 }: CellTextProps) {
-  const text = cut(children, room / FACES[look]);
+  const text = cut(children, FACES[look].style, room / FACES[look].factor);
   return (
     <text className={red ? `${look} red` : look} x={x} y={y} textAnchor={anchor}>
       {text}
@@ -32,9 +37,9 @@ export function CellText({
   );
 }
 
-function cut(text: string, room: number): string {
-  if (textWidth(text, "ref") <= room) return text;
+function cut(text: string, style: "ref" | "number", room: number): string {
+  if (textWidth(text, style) <= room) return text;
   const letters = [...text];
-  while (letters.length > 1 && textWidth(`${letters.join("")}…`, "ref") > room) letters.pop();
+  while (letters.length > 1 && textWidth(`${letters.join("")}…`, style) > room) letters.pop();
   return `${letters.join("").trimEnd()}…`;
 }

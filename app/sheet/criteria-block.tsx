@@ -1,3 +1,4 @@
+import { textWidth } from "../../lib/sheet/lettering";
 import type { Verdict } from "../../lib/values/verdict";
 import { CellText } from "./cell-text";
 import type { CriterionLine } from "./title-facts";
@@ -23,7 +24,7 @@ export function CriteriaBlock({ criteria, left, top }: CriteriaBlockProps) {
         return (
           <g key={words}>
             <VerdictMark verdict={verdict} x={left + 7.4} y={y - 8.6} />
-            <CellText look="tv" x={left + 22} y={y} room={158}>
+            <CellText look="tv" x={left + 22} y={y} room={203 - textWidth(shown, "number")}>
               {words}
             </CellText>
             <CellText

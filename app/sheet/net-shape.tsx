@@ -16,7 +16,7 @@ export function NetShape({
     <>
       <path className="hitwire" d={path} />
       <path className="w" d={path} />
-      {net.tag !== null && <TagShape tag={net.tag} />}
+      {net.tag !== null && <TagShape tag={net.tag} meets={net.tag.leader.length > 1} />}
     </>
   );
 }

@@ -16,14 +16,14 @@ export function CloudShape({ cloud }: { readonly cloud: Cloud }) {
   );
 }
 
-/** A number at a net or part. Past a limit: thick box and a diamond, so that no colour is needed. */
-export function TagShape({ tag }: { readonly tag: Tag }) {
+/** A number at a net or part. Past a limit: thick box and a diamond, so that no colour is needed. `meets`: its line ends on a wire. */
+export function TagShape({ tag, meets }: { readonly tag: Tag; readonly meets: boolean }) {
   const { level, box, letters, leader } = tag;
   const past = level === "past";
   return (
     <>
       {leader.length > 1 && <path className="ld" d={through(leader)} />}
-      {leader.length > 1 && <MeetingDot at={leader.at(-1)} />}
+      {meets && <MeetingDot at={leader.at(-1)} />}
       {box !== null && <rect className={past ? "vbox bad" : "vbox"} {...rectOf(box)} />}
       {box !== null && past && <PastMark x={box[0]} y={(box[1] + box[3]) / 2} />}
       <Letters letters={letters} />

@@ -72,7 +72,7 @@ export function SheetFigure(props: SheetFigureProps) {
       ))}
       {drawing.partTags.map((tag) => (
         <g key={`${tag.part} ${tag.leader.join()}`} {...unspoken}>
-          <TagShape tag={tag} />
+          <TagShape tag={tag} meets={false} />
         </g>
       ))}
       <BalloonButtons

@@ -27,6 +27,16 @@ export class ClearSpace {
     return sum;
   }
 
+  /** The first choice that is clear; null where none is. Takes its room. */
+  clear<Value>(choices: Iterable<Choice<Value>>): Value | null {
+    for (const { boxes, value } of choices) {
+      if (boxes.some((box) => this.ink(box) > 0)) continue;
+      this.take(...boxes);
+      return value;
+    }
+    return null;
+  }
+
   /** The first choice that is clear, else the one on the least ink. Takes its room. Null where there is none. */
   settle<Value>(choices: Iterable<Choice<Value>>): Value | null {
     let best: Choice<Value> | null = null;

@@ -6,7 +6,7 @@ import { letteringBox } from "./lettering";
 import type { Cloud, DrawnPart } from "./sheet-drawing";
 
 /** How far a cloud keeps from what it holds. */
-const ROOM = 8;
+const ROOM = 7;
 const TRIANGLE = { half: 9.5, height: 16 };
 
 /** Clouds around the parts that changed; those that would meet become one. Each bears the letter of the revision. */
@@ -16,7 +16,7 @@ export function drawClouds(
   space: ClearSpace,
 ): readonly Cloud[] {
   let groups = parts.map((part) => ({
-    box: grown(around(part.box, ...part.letters.map(letteringBox)), ROOM),
+    box: grown(around(bodyOf(part.box), ...part.letters.map(letteringBox)), ROOM),
     parts: [part.ref],
   }));
   for (let before = -1; before !== groups.length; ) {
@@ -30,6 +30,14 @@ export function drawClouds(
     );
     return { box, parts: refs, letter, triangle: triangle ?? [box[0], box[3]] };
   });
+}
+
+/** A part without the ends of its leads, so that the cloud keeps off the wires it hangs on. */
+function bodyOf([left, top, right, bottom]: Box): Box {
+  const lead = 8;
+  return bottom - top > right - left
+    ? [left, top + lead, right, bottom - lead]
+    : [left + lead, top, right - lead, bottom];
 }
 
 interface Group {

@@ -105,7 +105,10 @@ function placeOf(
     return at === undefined ? null : { at, outward: null };
   }
   const pin = placed.get(end.part)?.pins.find(({ name }) => name === end.pin);
-  return pin === undefined ? null : { at: pin.at, outward: pin.outward };
+  if (pin === undefined) return null;
+  // A test point stands on a wire, which passes it either way.
+  const stands = block.parts.some(({ ref, kind }) => ref === end.part && kind === "testPoint");
+  return { at: pin.at, outward: stands ? null : pin.outward };
 }
 
 /** A flag is reached from the side where its net comes from. */

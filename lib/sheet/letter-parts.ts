@@ -39,7 +39,10 @@ function* choices(words: PartLettering, box: Box): Generator<Choice<readonly Let
     stacked(words, [right + GAP, y - rise + step], "start"),
     stacked(words, [left - GAP, y - rise + step], "end"),
   ]);
+  const oneLine =
+    words.was === null && !words.removed && two ? [inOneLine(words, [x, top - GAP])] : [];
   const lying = [
+    ...oneLine,
     split(words, [x, top - GAP], [x, below]),
     stacked(words, [x, top - GAP - (two ? LINE : 0)], "middle"),
     stacked(words, [x, below], "middle"),
@@ -55,7 +58,12 @@ function* choices(words: PartLettering, box: Box): Generator<Choice<readonly Let
     stacked(words, [x, below + step], "middle"),
     stacked(words, [left - step, top - step / 2], "end"),
   ]);
-  const order = upright ? [...beside, ...lying, ...corners] : [...lying, ...beside, ...corners];
+  const large = right - left >= 50 && bottom - top >= 50;
+  const order = large
+    ? [...corners, ...beside, ...lying]
+    : upright
+      ? [...beside, ...lying, ...corners]
+      : [...lying, ...beside, ...corners];
   for (const letters of [...order, ...far])
     yield { boxes: letters.map(letteringBox), value: letters };
 }
@@ -66,6 +74,15 @@ function stacked(words: PartLettering, [x, y]: Point, anchor: Lettering["anchor"
 
 function split(words: PartLettering, above: Point, below: Point): Lettering[] {
   return [refAt(words, above, "middle"), ...valueAt(words, below, "middle")];
+}
+
+function inOneLine({ ref, value }: PartLettering, [x, y]: Point): Lettering[] {
+  const [first, second] = [textWidth(ref, "ref"), textWidth(value, "value")];
+  const left = x - (first + 5 + second) / 2;
+  return [
+    { at: [left, y], text: ref, style: "ref", anchor: "start" },
+    { at: [left + first + 5, y], text: value, style: "value", anchor: "start" },
+  ];
 }
 
 function refAt({ ref, removed }: PartLettering, at: Point, anchor: Lettering["anchor"]): Lettering {

@@ -16,17 +16,47 @@ export const LETTER_SIZES: Readonly<Record<LetterStyle, { size: number; even: bo
 const WIDTHS = new Map(
   (
     [
-      [26, " 'ijl,."],
-      [31, "!:;[]()·f"],
-      [38, "{}|tr-I/\\"],
-      [44, '"°?zs'],
-      [48, "cvLy*xJg"],
-      [52, "akeé_oFThnu"],
-      [54, "µZbdpqE$S0123456789+<=>^`~−±"],
-      [58, "YPVCX"],
-      [60, "RBA#K"],
-      [65, "DUG&OQΩHN"],
-      [78, "wM…"],
+      [22, " "],
+      [23, "'"],
+      [25, "ij"],
+      [26, "l"],
+      [27, ",."],
+      [28, "!:;"],
+      [30, "[]"],
+      [31, "()·"],
+      [32, "f"],
+      [33, "t{|}"],
+      [35, "r"],
+      [36, "-"],
+      [38, "/I\\"],
+      [42, '"'],
+      [43, "°"],
+      [44, "?z"],
+      [45, "s"],
+      [46, "c"],
+      [47, "Lvy"],
+      [48, "*x"],
+      [49, "Jg"],
+      [50, "ak"],
+      [51, "_eoé"],
+      [52, "F"],
+      [53, "Thnuµ"],
+      [54, "0123456789$+<=>ESZ^`bdpq~−±"],
+      [56, "Y"],
+      [57, "PV"],
+      [58, "CX"],
+      [60, "ABKR"],
+      [61, "#"],
+      [62, "DU"],
+      [64, "&GOQ"],
+      [65, "HNΩ"],
+      [73, "w"],
+      [74, "M"],
+      [77, "…"],
+      [80, "m"],
+      [81, "@"],
+      [84, "W"],
+      [86, "%"],
     ] as const
   ).flatMap(([width, letters]) => [...letters].map((letter) => [letter, width / 100] as const)),
 );
@@ -49,4 +79,14 @@ export function letteringBox({ at: [x, y], text, style, anchor }: Lettering): Bo
   const left = anchor === "start" ? x : anchor === "end" ? x - width : x - width / 2;
   const { size } = LETTER_SIZES[style];
   return [left, y - 0.72 * size, left + width, y + 0.1 * size];
+}
+
+/** A lettering without pencil marks. */
+export function letter(
+  style: LetterStyle,
+  text: string,
+  at: Lettering["at"],
+  anchor: Lettering["anchor"],
+): Lettering {
+  return { at, text, style, anchor };
 }

@@ -1,9 +1,10 @@
 import type { Point } from "../circuit/drawing";
 import type { Box } from "../kinds/part-symbol";
 import { drawBalloon } from "./balloons";
-import { lineBox } from "./box";
+import { grown, lineBox } from "./box";
 import type { ClearSpace } from "./clear-space";
-import { boxNet, boxPart, letterQuietNet } from "./letter-nets";
+import { letterQuietNet } from "./letter-nets";
+import { boxNet, boxPart } from "./number-box";
 import type {
   Balloon,
   Cloud,
@@ -114,18 +115,9 @@ export function drawPartTags(
   return (facts.partReadings ?? []).flatMap((reading) => {
     const part = parts.find(({ ref, removed }) => ref === reading.part && !removed);
     if (part === undefined) return [];
-    const [left, top, right, bottom] = part.box;
-    const [x, y] = part.at;
-    const tag = boxPart(
-      reading,
-      [
-        [x, top],
-        [x, bottom],
-        [right, y],
-        [left, y],
-      ],
-      space,
-    );
+    const [, top, , bottom] = part.box;
+    const [x] = part.at;
+    const tag = boxPart(reading, [[x, top] as const, [x, bottom] as const], space);
     return tag === null ? [] : [{ ...tag, part: part.ref }];
   });
 }
@@ -159,5 +151,11 @@ function targetOf({ anchor }: FindingMark, { parts, nets, partTags, clouds }: Dr
   }
   const tag = partTags.find(({ part }) => part === anchor.part);
   const cloud = clouds.find((one) => one.parts.includes(anchor.part));
-  return tag?.box ?? cloud?.box ?? parts.find(({ ref }) => ref === anchor.part)?.box ?? null;
+  const part = parts.find(({ ref }) => ref === anchor.part);
+  return tag?.box ?? cloud?.box ?? (part === undefined ? null : bodyOf(part));
+}
+
+/** An amplifier's pins stand far out: its triangle is what a line should reach. */
+function bodyOf({ box }: DrawnPart): Box {
+  return box[2] - box[0] >= 60 && box[3] - box[1] >= 60 ? grown(box, -8) : box;
 }

@@ -24,12 +24,16 @@ export function route(from: RouteEnd, to: RouteEnd, parts: readonly Box[]): read
   const near = parts.filter((box) => overlap(box, reach(from.at, to.at)) > 0);
   let best: readonly Point[] = [from.at, to.at];
   let least = Number.POSITIVE_INFINITY;
-  for (const path of candidates(from, to, near)) {
-    const cost = costOf(path, from, to, near);
-    if (cost < least) {
-      least = cost;
-      best = path;
+  for (const paths of [simplePaths, detours]) {
+    for (const path of paths(from, to, near)) {
+      const cost = costOf(path, from, to, near);
+      if (cost < least) {
+        least = cost;
+        best = path;
+      }
     }
+    // Most wires are plain: the many detours are looked at only where something stands in the way.
+    if (least < BACKWARD) break;
   }
   return best;
 }
@@ -38,14 +42,31 @@ function reach(a: Point, b: Point): Box {
   return lineBox(a, b, 100);
 }
 
-function candidates(from: RouteEnd, to: RouteEnd, parts: readonly Box[]): (readonly Point[])[] {
+function simplePaths(from: RouteEnd, to: RouteEnd): (readonly Point[])[] {
+  const [ax, ay] = from.at;
+  const [bx, by] = to.at;
+  const [x, y] = [onGrid((ax + bx) / 2), onGrid((ay + by) / 2)];
+  const paths: Point[][] = [
+    [[bx, ay]],
+    [[ax, by]],
+    [
+      [x, ay],
+      [x, by],
+    ],
+    [
+      [ax, y],
+      [bx, y],
+    ],
+  ];
+  return whole(paths, from, to);
+}
+
+function detours(from: RouteEnd, to: RouteEnd, parts: readonly Box[]): (readonly Point[])[] {
   const [ax, ay] = from.at;
   const [bx, by] = to.at;
   const columns = places([ax, bx], [from, to], 0, parts);
   const rows = places([ay, by], [from, to], 1, parts);
   const paths: Point[][] = [
-    [[bx, ay]],
-    [[ax, by]],
     ...columns.map((x): Point[] => [
       [x, ay],
       [x, by],
@@ -69,6 +90,10 @@ function candidates(from: RouteEnd, to: RouteEnd, parts: readonly Box[]): (reado
       ]),
     ),
   ];
+  return whole(paths, from, to);
+}
+
+function whole(paths: Point[][], from: RouteEnd, to: RouteEnd): (readonly Point[])[] {
   return paths.map((corners) => tidied([from.at, ...corners, to.at]));
 }
 
