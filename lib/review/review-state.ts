@@ -50,7 +50,11 @@ export type Decision =
   | (DecisionBody & { readonly kind: "check"; readonly revision: string; readonly item: string })
   | (DecisionBody & { readonly kind: "uncheck"; readonly revision: string; readonly item: string })
   | (DecisionBody & { readonly kind: "closure"; readonly finding: string; readonly reason: string })
-  | (DecisionBody & { readonly kind: "reopening"; readonly finding: string; readonly reason: string })
+  | (DecisionBody & {
+      readonly kind: "reopening";
+      readonly finding: string;
+      readonly reason: string;
+    })
   | (DecisionBody & {
       readonly kind: "waiver";
       /** `W-1`, running in the design. */
@@ -61,7 +65,11 @@ export type Decision =
       /** The margin that was waived (limit / applied - 1), null where unknown was waived. It lapses when a later margin is worse. */
       readonly margin: number | null;
     })
-  | (DecisionBody & { readonly kind: "withdrawal"; readonly waiver: string; readonly reason: string })
+  | (DecisionBody & {
+      readonly kind: "withdrawal";
+      readonly waiver: string;
+      readonly reason: string;
+    })
   | (DecisionBody & {
       readonly kind: "signature";
       readonly revision: string;
@@ -72,7 +80,11 @@ export type Decision =
       readonly name: string;
     })
   | (DecisionBody & { readonly kind: "release"; readonly revision: string })
-  | (DecisionBody & { readonly kind: "return"; readonly revision: string; readonly reason: string });
+  | (DecisionBody & {
+      readonly kind: "return";
+      readonly revision: string;
+      readonly reason: string;
+    });
 
 interface DecisionBody {
   readonly id: string;

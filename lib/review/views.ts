@@ -85,7 +85,11 @@ export interface RegisterRow {
   /** It waits for the one who looks. */
   readonly waitsForMe: boolean;
   /** Least margin of the latest revision; null where not solved. */
-  readonly leastMargin: { readonly margin: number; readonly part: string; readonly waived: boolean } | null;
+  readonly leastMargin: {
+    readonly margin: number;
+    readonly part: string;
+    readonly waived: boolean;
+  } | null;
   /** Where the row leads. */
   readonly href: string;
 }
