@@ -62,8 +62,8 @@ export class JunctionCurrent {
   }
 
   follow(v: number, at: Stage): void {
-    const limited = at.fresh ? this.beginning() : this.limit(v);
-    if (at.fresh || Math.abs(limited - v) > 1e-9 * (1 + Math.abs(v))) at.limited++;
+    const limited = this.followed(v, at.begin);
+    if (Math.abs(limited - v) > 1e-9 * (1 + Math.abs(v))) at.limited++;
     this.last = limited;
     const e = exponential(limited / this.scale);
     this.conductance = (this.saturationCurrent * e.slope) / this.scale;
@@ -78,8 +78,10 @@ export class JunctionCurrent {
     this.conductance += at.helping;
   }
 
-  private beginning(): number {
-    return this.beginsConducting ? this.critical : 0;
+  private followed(v: number, begin: Stage["begin"]): number {
+    if (begin === "warm") return v;
+    if (begin === "cold") return this.beginsConducting ? this.critical : 0;
+    return this.limit(v);
   }
 
   private limit(v: number): number {

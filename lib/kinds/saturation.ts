@@ -14,12 +14,17 @@ export class Saturation {
   private last = 0;
 
   follow(s: number, at: Stage): void {
-    const limited = at.fresh ? 0 : this.limit(s);
-    if (at.fresh || Math.abs(limited - s) > 1e-9 * (1 + Math.abs(s))) at.limited++;
+    const limited = this.followed(s, at.begin);
+    if (Math.abs(limited - s) > 1e-9 * (1 + Math.abs(s))) at.limited++;
     this.last = limited;
     const value = Math.tanh(limited);
     this.slope = 1 - value * value;
     this.value = value + this.slope * (s - limited);
+  }
+
+  private followed(s: number, begin: Stage["begin"]): number {
+    if (begin === "warm") return s;
+    return begin === "cold" ? 0 : this.limit(s);
   }
 
   private limit(s: number): number {
