@@ -80,7 +80,7 @@ function withoutHelp(system: System, x: Float64Array): Converged | null {
   x.set(before);
   system.stage.helping = HELPING;
   system.stage.begin = "warm";
-  system.assemble(x, 0);
+  system.assemble(x);
   return null;
 }
 

@@ -22,16 +22,11 @@ export interface NewtonOptions {
   readonly mostIterations: number;
   /** Largest change of a node voltage in one step, V; Infinity: full steps. */
   readonly largestStep: number;
-  /** d/dt stands for this rate (1/s) times the charge, plus `history` by row; 0: no charges. */
-  readonly rate: number;
-  readonly history: Float64Array | null;
 }
 
 export const plainNewton: NewtonOptions = {
   mostIterations: 60,
   largestStep: Number.POSITIVE_INFINITY,
-  rate: 0,
-  history: null,
 };
 
 /** A step below this part of an unknown's size, or below the absolute one (V or A), is none. */
@@ -56,8 +51,8 @@ export function newton(
   let withoutGain = 0;
   let worst = 0;
   for (let iteration = 1; iteration <= options.mostIterations; iteration++) {
-    system.assemble(x, options.rate);
-    residual(system, options, b);
+    system.assemble(x);
+    residual(system, b);
     const factored = system.factorised();
     if (!factored.ok) return factored;
     const step = solve(factored.value, b);
@@ -86,10 +81,10 @@ export function newton(
   return fail({ kind: "noConvergence", iterations: options.mostIterations, unknown: worst });
 }
 
-function residual(system: System, { rate, history }: NewtonOptions, b: Float64Array): void {
-  const { f, q } = system;
+function residual(system: System, b: Float64Array): void {
+  const { f, q, rate, history } = system;
   for (let k = 0; k < b.length; k++)
-    b[k] = -((f[k + 1] ?? 0) + rate * (q[k + 1] ?? 0) + (history?.[k + 1] ?? 0));
+    b[k] = -((f[k + 1] ?? 0) + rate * (q[k + 1] ?? 0) + (history[k + 1] ?? 0));
 }
 
 function damping(system: System, step: Float64Array, options: NewtonOptions): number {

@@ -102,7 +102,7 @@ function solveBent(
   }
   if (!answer.ok) return { system, x, found: null, error: answer.error };
   system.stage.begin = "warm";
-  system.assemble(x, 0);
+  system.assemble(x);
   return { system, x, found: answer.value, error: null };
 }
 
@@ -153,6 +153,11 @@ function certified(
   if (holds(certificate)) return { ...reading, certificate, faults: [], kept: { system, x } };
   const fault: Fault = { code: "notTrusted", nets: [], parts: [] };
   return { ...nothing(network), certificate, faults: [fault], kept: null };
+}
+
+/** An operating point of which nothing is known but the reference. */
+export function unsolved(network: Network): OperatingPoint {
+  return { ...nothing(network), certificate: null, faults: [], kept: null };
 }
 
 /** No voltage but the reference's. */

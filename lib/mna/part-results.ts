@@ -44,14 +44,24 @@ export interface Reading {
   readonly parts: Record<string, PartResult>;
 }
 
-/** Reads a solution; the system must have been assembled at `x`. */
-export function readSolution(system: System, x: Float64Array): Reading {
+/**
+ * Reads a solution; the system must have been assembled at `x`.
+ * @param charging rates of charge by terminal, A, all laws one after the other; null: none
+ */
+export function readSolution(
+  system: System,
+  x: Float64Array,
+  charging: Float64Array | null = null,
+): Reading {
   const nets: [string, number][] = [];
   system.network.unknowns.names.forEach((name, unknown) => {
     if ("net" in name) nets.push([name.net, positiveZero(x[unknown] ?? 0)]);
   });
+  let offset = 0;
   const parts = system.network.parts.map((placed): [string, PartResult] => {
-    const currents = pinCurrents(placed, null);
+    const { length } = placed.law.terminals;
+    const currents = pinCurrents(placed, charging?.subarray(offset, offset + length) ?? null);
+    offset += length;
     const result: PartResult = {
       voltage: placed.pins.length < 2 ? null : partVoltage(placed, x),
       power: partPower(placed, x, currents),

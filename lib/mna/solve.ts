@@ -1,7 +1,9 @@
 import type { Circuit, Condition } from "../kinds/circuit";
 import { hasLaw } from "../kinds/laws";
+import { courseInTime } from "./analyses/course-in-time";
+import { sweep } from "./analyses/sweep";
 import type { Fault } from "./diagnosis";
-import { type Kept, operatingPoint } from "./operating-point";
+import { type Kept, type OperatingPoint, operatingPoint } from "./operating-point";
 import { problem } from "./problem-sentences";
 import type { ConditionResult, PartResult, SolvedCircuit, SolveProblem } from "./solution";
 
@@ -53,26 +55,46 @@ export function solveCondition(
     return refused(circuit, condition, { code: "notYetSolved", nets: [], parts: lawless });
   if (condition.parts.length > MOST_PARTS)
     return refused(circuit, condition, { code: "tooLarge", nets: [], parts: [] });
-  if (condition.analysis.type === "frequencyResponse" || condition.spread !== null)
+  if (condition.spread !== null)
     return refused(circuit, condition, { code: "notYetSolved", nets: [], parts: [] });
 
-  const point = operatingPoint(circuit, condition, null, before);
-  return answered(
-    condition,
-    point.faults,
-    {
-      name: condition.name,
-      status: point.faults.length === 0 ? "solved" : "unsolvable",
-      nets: point.nets,
-      parts: point.parts,
-      certificate: point.certificate,
-      sweep: null,
-      frequencyResponse: null,
-      transient: null,
-      spread: null,
-    },
-    point.kept,
-  );
+  return analysed(circuit, condition, before);
+}
+
+function analysed(circuit: Circuit, condition: Condition, before: Kept | null): SolvedCondition {
+  const { analysis } = condition;
+  switch (analysis.type) {
+    case "operatingPoint": {
+      const point = operatingPoint(circuit, condition, null, before);
+      return answered(condition, point.faults, resultOf(condition, point), point.kept);
+    }
+    case "sweep": {
+      const point = operatingPoint(circuit, condition, null, before);
+      const swept = sweep(circuit, condition, analysis, point.kept ?? before);
+      const result = { ...resultOf(condition, point), sweep: swept.sweep };
+      return answered(condition, [...point.faults, ...swept.faults], result, swept.kept);
+    }
+    case "transient": {
+      const { point, transient, faults } = courseInTime(circuit, condition, analysis, before);
+      return answered(condition, faults, { ...resultOf(condition, point), transient }, point.kept);
+    }
+    case "frequencyResponse":
+      return refused(circuit, condition, { code: "notYetSolved", nets: [], parts: [] });
+  }
+}
+
+function resultOf(condition: Condition, point: OperatingPoint): ConditionResult {
+  return {
+    name: condition.name,
+    status: "solved",
+    nets: point.nets,
+    parts: point.parts,
+    certificate: point.certificate,
+    sweep: null,
+    frequencyResponse: null,
+    transient: null,
+    spread: null,
+  };
 }
 
 function answered(
@@ -82,7 +104,7 @@ function answered(
   kept: Kept | null,
 ): SolvedCondition {
   return {
-    result,
+    result: { ...result, status: faults.length === 0 ? "solved" : "unsolvable" },
     problems: faults.map(({ code, nets, parts }) => problem(code, condition.name, nets, parts)),
     unknowns: kept?.system.size ?? 0,
     kept,
@@ -96,20 +118,12 @@ function refused(circuit: Circuit, condition: Condition, fault: Fault): SolvedCo
     const temperature = part.temperature ?? condition.ambient;
     return [part.path, { voltage: null, power: null, currents, temperature }];
   });
-  return answered(
-    condition,
-    [fault],
-    {
-      name: condition.name,
-      status: "unsolvable",
-      nets: Object.fromEntries(nets),
-      parts: Object.fromEntries(parts),
-      certificate: null,
-      sweep: null,
-      frequencyResponse: null,
-      transient: null,
-      spread: null,
-    },
-    null,
-  );
+  const point = {
+    nets: Object.fromEntries(nets),
+    parts: Object.fromEntries(parts),
+    certificate: null,
+    faults: [],
+    kept: null,
+  };
+  return answered(condition, [fault], resultOf(condition, point), null);
 }

@@ -48,6 +48,11 @@ export class System {
   /** S from every node to the reference, times the distance from `anchor`, while a solution is approached. */
   shunt = 0;
   readonly anchor: Float64Array;
+  /** S, that holds bent unknowns. */
+  holding = 1;
+  /** 1/s: the rate of the charges is `rate` q + `history`, by row; 0: nothing changes in time. */
+  rate = 0;
+  readonly history: Float64Array;
   readonly matrix: SparseMatrix;
   readonly structure: Structure;
   private readonly openedRow: Uint8Array;
@@ -61,6 +66,7 @@ export class System {
     this.f = new Float64Array(count + 1);
     this.q = new Float64Array(count + 1);
     this.anchor = new Float64Array(count + 1);
+    this.history = new Float64Array(count + 1);
     this.structure = structureOf(network, bent, before);
     this.matrix = {
       pattern: this.structure.pattern,
@@ -75,8 +81,8 @@ export class System {
   }
 
   /** Fills residuals `f`, charges `q` and the matrix G + rate C at `x` (x[0] is the reference, 0). */
-  assemble(x: Float64Array, rate: number): void {
-    const { f, q, stage, openedRow } = this;
+  assemble(x: Float64Array): void {
+    const { f, q, stage, openedRow, rate } = this;
     const { values } = this.matrix;
     const { slot } = this.structure;
     f.fill(0);
@@ -109,18 +115,19 @@ export class System {
     const { f, anchor } = this;
     const { values } = this.matrix;
     const { slot } = this.structure;
-    const add = (row: number, conductance: number, distance: number): void => {
+    const add = (row: number, conductance: number, current: number): void => {
       const place = slot[entry] ?? 0;
       entry++;
       values[place] = (values[place] ?? 0) + conductance;
-      f[row] = (f[row] ?? 0) + conductance * distance;
+      f[row] = (f[row] ?? 0) + current;
     };
     for (const node of this.network.unknowns.nodes) {
       const held = this.bent.held.get(node);
-      const conductance = this.shunt + (held === undefined ? 0 : 1);
-      const pull = this.shunt * ((x[node] ?? 0) - (anchor[node] ?? 0));
-      const hold = held === undefined ? 0 : (x[node] ?? 0) - held;
-      add(node, conductance, conductance === 0 ? 0 : (pull + hold) / conductance);
+      const holding = held === undefined ? 0 : this.holding;
+      const pull =
+        this.shunt * ((x[node] ?? 0) - (anchor[node] ?? 0)) +
+        holding * ((x[node] ?? 0) - (held ?? 0));
+      add(node, this.shunt + holding, pull);
     }
     for (let row = 1; row < this.openedRow.length; row++)
       if (this.openedRow[row] === 1) add(row, 1, x[row] ?? 0);
