@@ -2,7 +2,6 @@
 
 import type { Cause, Comparison } from "../../lib/comparison/comparison";
 import { shiftWords } from "../wording/numbers";
-import { quantityName } from "../wording/quantities";
 import { editWords } from "./edit-words";
 
 /** The Causes pane of the ledger: for each loud shift, the fair share of every edit. */
@@ -86,9 +85,7 @@ function causeGroups(causes: readonly Cause[], condition: string): readonly Caus
   const groups = new Map<string, Cause[]>();
   for (const cause of causes) {
     if (cause.condition !== condition) continue;
-    const subject =
-      cause.net ??
-      `${cause.part ?? "?"} ${cause.quantity === "margin" ? "margin" : quantityName(cause.quantity)}`;
+    const subject = cause.net ?? `${cause.part ?? "?"} margin, ${cause.rule ?? ""}`;
     groups.set(subject, [...(groups.get(subject) ?? []), cause]);
   }
   return [...groups]

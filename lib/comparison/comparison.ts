@@ -59,6 +59,8 @@ export interface Cause {
   readonly net?: string;
   readonly part?: string;
   readonly quantity: string;
+  /** Of a margin: the rule it is under. */
+  readonly rule?: string;
   readonly condition: string;
   readonly share: number;
 }

@@ -46,11 +46,11 @@ export function assemblePart(flat: FlatPart, ofCondition: Overrides): Part {
     at: source.at,
     pointer: source.place.pointer,
   };
-  return typed(source.kind, body, params);
+  return joinPart(source.kind, body, params);
 }
 
 /** Joins a part's body and parameters under its kind. */
-function typed<K extends Kind>(kind: K, body: PartBody, params: object): Part<K> {
+export function joinPart<K extends Kind>(kind: K, body: PartBody, params: object): Part<K> {
   if (!areParameters(kind, params))
     throw new Error(`the parameters of ${body.path} are incomplete`);
   return { ...body, kind, params };
