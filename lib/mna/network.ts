@@ -18,19 +18,26 @@ export interface PlacedPart {
 export interface Network {
   readonly unknowns: Unknowns;
   readonly parts: readonly PlacedPart[];
+  /** Every resistance has its current as an unknown. */
+  readonly precise: boolean;
 }
 
 /**
  * Gives every part its law and its unknowns.
+ * @param precise every resistance gets its current as an unknown: a current that is a difference of nearly
+ *   equal voltages (into an open end, say) would be rounding and break Kirchhoff's law
  * @param heated temperatures of parts that heat themselves, degrees Celsius by path
  */
 export function networkOf(
   circuit: Circuit,
   condition: Condition,
+  precise = false,
   heated: ReadonlyMap<string, number> = new Map(),
 ): Network {
   const unknowns = new Unknowns(circuit);
-  const largestResistance = largestResistanceOf(condition.parts);
+  const largestResistance = precise
+    ? Number.POSITIVE_INFINITY
+    : largestResistanceOf(condition.parts);
   const placed = new Map<string, PlacedPart>();
   const place = (part: Part): void => {
     const temperature = heated.get(part.path) ?? part.temperature ?? condition.ambient;
@@ -56,7 +63,11 @@ export function networkOf(
   const later = condition.parts.filter((part) => part.control !== null || part.of !== null);
   for (const part of condition.parts) if (!later.includes(part)) place(part);
   for (const part of inOrderOfControl(later)) place(part);
-  return { unknowns, parts: condition.parts.flatMap((part) => placed.get(part.path) ?? []) };
+  return {
+    unknowns,
+    precise,
+    parts: condition.parts.flatMap((part) => placed.get(part.path) ?? []),
+  };
 }
 
 /** A controlled source may be controlled by another's current: that one first. */

@@ -25,6 +25,8 @@ export interface OperatingPoint extends Reading {
 }
 
 const MOST_STATES = 20;
+/** A residual above this is worth solving again with every current as an unknown. */
+const WORTH_MORE = 1e-12;
 
 /**
  * The operating point of a condition.
@@ -37,13 +39,17 @@ export function operatingPoint(
   time: number | null,
   before: Kept | null,
 ): OperatingPoint {
-  let network = networkOf(circuit, condition);
+  let network = networkOf(circuit, condition, before?.system.network.precise ?? false);
   let solved = solveNetwork(network, condition, time, before);
+  if (!network.precise && !((solved.certificate?.kclResidual ?? 0) <= WORTH_MORE)) {
+    network = networkOf(circuit, condition, true);
+    solved = solveNetwork(network, condition, time, before);
+  }
   if (condition.selfHeating) {
     for (let round = 0; round < MOST_STATES && solved.kept !== null; round++) {
       const heated = heatedTemperatures(network, solved.parts, condition);
       if (heated === null) break;
-      network = networkOf(circuit, condition, heated);
+      network = networkOf(circuit, condition, network.precise, heated);
       solved = solveNetwork(network, condition, time, solved.kept);
     }
   }
