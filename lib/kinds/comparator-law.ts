@@ -23,24 +23,53 @@ export function comparator(part: Part<"comparator">, site: Site): Law {
     (x[inPlus] ?? 0) - (x[inMinus] ?? 0) + offsetVoltage;
   const error = (x: Float64Array): number =>
     difference(x) + (state.high ? hysteresis / 2 : -hysteresis / 2);
-  const settle = (x: Float64Array): boolean => {
-    const asks = state.high ? error(x) >= 0 : error(x) > 0;
-    if (hysteresis === 0 || asks === state.high) return false;
-    state.high = asks;
-    return true;
+  const restless = (x: Float64Array, at: Stage): boolean => {
+    if (hysteresis === 0 && !at.switching) return false;
+    return state.high ? error(x) < 0 : error(x) > 0;
   };
-  const law = openCollector
-    ? openOutput(part, site, error, gain)
-    : drivenOutput(part, site, error, gain);
-  return { ...law, settle };
+  const flip = (): void => {
+    state.high = !state.high;
+  };
+  const output = outputBy(state, error, gain);
+  const law = openCollector ? openOutput(part, site, output) : drivenOutput(part, site, output);
+  return { ...law, restless, flip };
 }
 
-function openOutput(
-  part: Part<"comparator">,
-  site: Site,
+/** Where the output stands between its ends, -1 to 1, and its slope by the input, for a half range. */
+interface Output {
+  readonly follow: (x: Float64Array, at: Stage, half: number) => void;
+  value: number;
+  slope: number;
+  byInput: number;
+  argument: number;
+}
+
+function outputBy(
+  state: { readonly high: boolean },
   error: (x: Float64Array) => number,
   gain: number,
-): Law {
+): Output {
+  const saturation = new Saturation();
+  const follow = (x: Float64Array, at: Stage, half: number): void => {
+    if (at.switching) {
+      output.value = state.high ? 1 : -1;
+      output.slope = 0;
+      output.byInput = 0;
+      output.argument = 0;
+      return;
+    }
+    const most = Math.min(gain, at.gainCap);
+    output.argument = (most * error(x)) / half;
+    saturation.follow(output.argument, at);
+    output.value = saturation.value;
+    output.slope = saturation.slope;
+    output.byInput = saturation.slope * most;
+  };
+  const output: Output = { follow, value: 0, slope: 0, byInput: 0, argument: 0 };
+  return output;
+}
+
+function openOutput(part: Part<"comparator">, site: Site, output: Output): Law {
   const { plus, minus } = suppliesOf(site);
   const [inPlus, inMinus, out] = [site.pin("inPlus"), site.pin("inMinus"), site.pin("out")];
   const places = new Places();
@@ -48,15 +77,13 @@ function openOutput(
     for (const column of [out, minus, inPlus, inMinus]) places.add(row, column);
   const law = emptyLaw([inPlus, inMinus, out, plus, minus], places);
   const { f, g } = law;
-  const saturation = new Saturation();
   const resistance = part.params.outputResistance;
   const on = 1 / (1 / ON + resistance);
   const evaluate = (x: Float64Array, at: Stage): void => {
-    const most = Math.min(gain, at.gainCap);
-    saturation.follow(most * error(x), at);
+    output.follow(x, at, 1);
     const v = (x[out] ?? 0) - (x[minus] ?? 0);
-    const conductance = OFF + ((on - OFF) * (1 - saturation.value)) / 2;
-    const byError = (-(on - OFF) * saturation.slope * most * v) / 2;
+    const conductance = OFF + ((on - OFF) * (1 - output.value)) / 2;
+    const byError = (-(on - OFF) * output.byInput * v) / 2;
     f[2] = conductance * v;
     f[4] = -f[2];
     const row = [conductance, -conductance, byError, -byError];
@@ -68,12 +95,7 @@ function openOutput(
   return { ...law, evaluate, paths: [{ from: out, to: minus, tie: "conducts" }] };
 }
 
-function drivenOutput(
-  part: Part<"comparator">,
-  site: Site,
-  error: (x: Float64Array) => number,
-  gain: number,
-): Law {
+function drivenOutput(part: Part<"comparator">, site: Site, output: Output): Law {
   const { outputResistance, dropToPlus, dropToMinus, outputLow, outputHigh } = part.params;
   const supplies = suppliesOf(site);
   const [inPlus, inMinus, out] = [site.pin("inPlus"), site.pin("inMinus"), site.pin("out")];
@@ -87,7 +109,6 @@ function drivenOutput(
   const pins = [inPlus, inMinus, out, site.pin("supplyPlus"), site.pin("supplyMinus")];
   const law = emptyLaw([...pins, current, 0], places);
   const { f, g } = law;
-  const saturation = new Saturation();
 
   const evaluate = (x: Float64Array, at: Stage): void => {
     const i = x[current] ?? 0;
@@ -102,18 +123,16 @@ function drivenOutput(
     const high = outputHigh ?? (x[supplies.plus] ?? 0) - dropToPlus;
     const low = outputLow ?? (x[supplies.minus] ?? 0) + dropToMinus;
     const half = Math.max((high - low) / 2, LEAST_HALF);
-    const most = Math.min(gain, at.gainCap);
-    const s = (most * error(x)) / half;
-    saturation.follow(s, at);
-    const { value, slope } = saturation;
-    const byHalf = half > LEAST_HALF ? (value - s * slope) / 2 : 0;
+    output.follow(x, at, half);
+    const { value, slope, byInput, argument } = output;
+    const byHalf = half > LEAST_HALF ? (value - argument * slope) / 2 : 0;
     f[5] = (x[out] ?? 0) - (high + low) / 2 - half * value - outputResistance * i;
     g[3] = 1;
     g[4] = outputHigh === null ? -0.5 - byHalf : 0;
     g[5] = outputLow === null ? -0.5 + byHalf : 0;
     g[6] = -outputResistance;
-    g[7] = -slope * most;
-    g[8] = slope * most;
+    g[7] = -byInput;
+    g[8] = byInput;
   };
   return { ...law, evaluate, paths: [{ from: out, to: supplies.plus, tie: "controlsVoltage" }] };
 }

@@ -25,8 +25,10 @@ export interface Law {
   readonly paths: readonly DirectPath[];
   /** Sets `q` to what a given capacitor voltage (V) or inductor current (A) holds. */
   readonly hold?: (value: number) => void;
-  /** The state that a law with a memory is in, and the change to the one its unknowns ask for. */
-  readonly settle?: (x: Float64Array) => boolean;
+  /** Whether a law with a memory is in another state than its unknowns ask for. */
+  readonly restless?: (x: Float64Array, at: Stage) => boolean;
+  /** Changes that state. */
+  readonly flip?: () => void;
 }
 
 /** A way for a direct current between two unknowns. */
@@ -53,6 +55,8 @@ export interface Stage {
   gainCap: number;
   /** Counted up by every law that did not follow the unknowns all the way. */
   limited: number;
+  /** In a course of time comparators switch: their output is one or the other, by their state. */
+  switching: boolean;
   /** `cold`: laws begin where a search begins best; `warm`: at the given unknowns; null: they go on. */
   begin: "cold" | "warm" | null;
 }

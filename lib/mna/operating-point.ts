@@ -6,6 +6,7 @@ import { type Network, networkOf } from "./network";
 import type { NoSolution } from "./newton";
 import { type Reading, readSolution } from "./part-results";
 import { heatedTemperatures } from "./self-heating";
+import { settled } from "./settle";
 import type { Certificate } from "./solution";
 import { type Bent, System } from "./system";
 import { undetermined } from "./undetermined";
@@ -103,20 +104,13 @@ function solveBent(
   system.stage.time = time;
   let answer = findSolution(system, x, warm);
   for (let round = 0; round < MOST_STATES && answer.ok; round++) {
-    if (!settled(network, x)) break;
+    if (!settled(system, x)) break;
     answer = findSolution(system, x, true);
   }
   if (!answer.ok) return { system, x, found: null, error: answer.error };
   system.stage.begin = "warm";
   system.assemble(x);
   return { system, x, found: answer.value, error: null };
-}
-
-/** Whether a law with a memory changed its state. */
-function settled(network: Network, x: Float64Array): boolean {
-  let changed = false;
-  for (const { law } of network.parts) if (law.settle?.(x) === true) changed = true;
-  return changed;
 }
 
 function startOf(network: Network, condition: Condition): ReadonlyMap<number, number> {

@@ -43,6 +43,7 @@ export class System {
     helping: 0,
     gainCap: Number.POSITIVE_INFINITY,
     limited: 0,
+    switching: false,
     begin: null,
   };
   /** S from every node to the reference, times the distance from `anchor`, while a solution is approached. */

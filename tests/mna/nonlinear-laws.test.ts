@@ -98,6 +98,7 @@ function stage(time: number | null): Stage {
     helping: 1e-12,
     gainCap: Number.POSITIVE_INFINITY,
     limited: 0,
+    switching: false,
     begin: "warm",
   };
 }

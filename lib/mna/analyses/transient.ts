@@ -4,6 +4,7 @@ import { certify } from "../certificate";
 import type { Fault } from "../diagnosis";
 import type { OperatingPoint } from "../operating-point";
 import { readSolution } from "../part-results";
+import { isRestless, settled } from "../settle";
 import type { TransientResult } from "../solution";
 import type { System } from "../system";
 import { cornersOf } from "./corners";
@@ -30,7 +31,13 @@ const LEAST_SHRINKING = 0.2;
 const LEAST_STEP = 1e-13;
 /** Numbers that one course may store. */
 const MOST_STORED = 5_000_000;
-const MOST_STEPS = 2_000_000;
+const MOST_STEPS = 500_000;
+/** Of the whole course: how exactly switching is located. */
+const RESOLUTION = 1e-9;
+/** A comparator that switches more often is none, but an amplifier in the linear part of its range. */
+const MOST_FLIPS = 20_000;
+/** Parts that switch each other at one time. */
+const MOST_ROUNDS = 10;
 
 /**
  * Follows the circuit in time by TR-BDF2 with steps as large as the error allows, exactly onto every
@@ -58,6 +65,7 @@ class Run {
   private readonly carries: Uint8Array;
   private readonly largest: Float64Array;
   private readonly instant: number;
+  private flips = 0;
   private state: State;
   private middle: State;
   private end: State;
@@ -77,6 +85,8 @@ class Run {
     this.largest = new Float64Array(system.size + 1);
     this.instant = INSTANT * analysis.until;
     this.state = initialState(system, analysis, operatingPoint);
+    system.stage.switching = true;
+    settled(system, this.state.x);
     this.middle = emptyState(system);
     this.end = emptyState(system);
   }
@@ -104,6 +114,7 @@ class Run {
     let width = Math.min(maxStep, until) / 1000;
     let corner = 0;
     for (let steps = 0; this.state.time < until; steps++) {
+      if (this.flips > MOST_FLIPS) return this.stopped("stepTooSmall");
       if (steps > MOST_STEPS || this.recorder.stored > MOST_STORED) return this.stopped("tooLarge");
       while ((this.corners[corner] ?? until) <= this.state.time && corner < this.corners.length)
         corner++;
@@ -111,6 +122,11 @@ class Run {
       const onto = corner < this.corners.length;
       const lands = this.landing(Math.min(width, maxStep), target);
       const error = this.try(lands.width, lands.lands ? target : null, onto);
+      // Switching is located by halving; where it happens, to the resolution, the step ends.
+      if (error <= 1 && lands.width > RESOLUTION * until && isRestless(this.system, this.end.x)) {
+        width = lands.width / 2;
+        continue;
+      }
       if (error <= 1) {
         if (!this.accept(lands.lands, target, onto)) return this.stopped("noConvergence");
         const growth = error === 0 ? MOST_GROWTH : SAFETY * error ** (-1 / 3);
@@ -174,15 +190,17 @@ class Run {
     this.recorder.addStep(this.state, this.middle, this.end, endTime);
     [this.state, this.end] = [this.end, this.state];
     this.note(endTime);
-    let changed = cornered;
-    for (const { law } of this.system.network.parts)
-      if (law.settle?.(this.state.x) === true) changed = true;
-    return changed ? this.anew() : true;
+    return cornered || isRestless(this.system, this.state.x) ? this.anew() : true;
   }
 
   /** Begins anew after a jump: at the same time, with the same charges. */
   private anew(): boolean {
-    if (!reinitialise(this.system, this.state, this.instant)) return false;
+    for (let round = 0; round < MOST_ROUNDS; round++) {
+      const flipped = settled(this.system, this.state.x);
+      if (round > 0 && !flipped) break;
+      if (flipped) this.flips++;
+      if (!reinitialise(this.system, this.state, this.instant)) return false;
+    }
     this.note();
     const last = this.recorder.time.at(-1) ?? 0;
     if (this.state.time > last) this.recorder.add(this.state.time, this.state.x);
