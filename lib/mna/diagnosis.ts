@@ -19,6 +19,33 @@ export interface Fault {
   readonly parts: readonly string[];
 }
 
+/**
+ * The same for a system that turned out singular: its undetermined nodes are held, and what then still
+ * differs is named. `unknowns` are those without a pivot.
+ */
+export function diagnoseSingular(
+  network: Network,
+  before: Diagnosis,
+  unknowns: readonly number[],
+): Diagnosis {
+  const nodes = new Set(network.unknowns.nodes);
+  const without = new Set(unknowns);
+  const held = new Map(before.bent.held);
+  for (const unknown of unknowns) if (nodes.has(unknown)) held.set(unknown, 0);
+  if (held.size === before.bent.held.size)
+    for (const { law } of network.parts)
+      if (law.terminals.some((terminal) => without.has(terminal)))
+        for (const terminal of law.terminals) if (nodes.has(terminal)) held.set(terminal, 0);
+  return {
+    faults: [{ code: "singular", nets: [], parts: [] }],
+    bent: { ...before.bent, held },
+    otherwise: {
+      ...before.otherwise,
+      held: new Map([...held.keys()].map((unknown) => [unknown, OTHER_VOLTAGE])),
+    },
+  };
+}
+
 /** V: the other voltage at which floating nets are held. */
 const OTHER_VOLTAGE = 1;
 /** A: a sum of source currents below this part of the largest is rounding. */
@@ -43,7 +70,7 @@ export function diagnose(network: Network, stage: Stage): Diagnosis {
   const opened = new Set<string>();
   const openedOtherwise = new Set<string>();
   for (const loop of loopsOf(network)) {
-    faults.push({ code: "sourcesFight", nets: loop.nets, parts: loop.parts });
+    if (!loop.harmless) faults.push({ code: "sourcesFight", nets: loop.nets, parts: loop.parts });
     opened.add(loop.closing);
     openedOtherwise.add(loop.parts.find((part) => part !== loop.closing) ?? loop.closing);
   }

@@ -1,7 +1,7 @@
 import type { Circuit, Condition } from "../kinds/circuit";
 import { certify, holds } from "./certificate";
 import { type Found, findSolution } from "./continuations";
-import { type Diagnosis, diagnose, type Fault } from "./diagnosis";
+import { type Diagnosis, diagnose, diagnoseSingular, type Fault } from "./diagnosis";
 import { type Network, networkOf } from "./network";
 import type { NoSolution } from "./newton";
 import { type Reading, readSolution } from "./part-results";
@@ -67,12 +67,33 @@ function solveNetwork(
   system.stage.time = time;
   const diagnosis = diagnose(network, system.stage);
   const solution = solveBent(network, diagnosis.bent, condition, time, before);
+  if (solution.error?.kind === "singular" && diagnosis.faults.length === 0) {
+    const singular = diagnoseSingular(network, diagnosis, solution.error.unknowns);
+    const rest = solveBent(network, singular.bent, condition, time, null);
+    if (rest.error === null)
+      return named(network, published(network, singular, rest, condition, time), solution.error);
+  }
   if (solution.error !== null) {
     const faults =
       diagnosis.faults.length > 0 ? diagnosis.faults : [faultOf(network, solution.error)];
     return { ...nothing(network), certificate: null, faults, kept: null };
   }
   return published(network, diagnosis, solution, condition, time);
+}
+
+/** A singular fault with the nets that came out undetermined, and the parts at them. */
+function named(network: Network, point: OperatingPoint, error: NoSolution): OperatingPoint {
+  const nets = Object.keys(point.nets).filter((net) => point.nets[net] === null);
+  const own = faultOf(network, error);
+  const parts = network.parts.filter(({ part }) =>
+    Object.values(part.pins).some((net) => net !== null && nets.includes(net)),
+  );
+  const fault: Fault = {
+    code: "singular",
+    nets: nets.length > 0 ? nets : own.nets,
+    parts: nets.length > 0 ? parts.map(({ part }) => part.path) : own.parts,
+  };
+  return { ...point, faults: [fault] };
 }
 
 interface Solution {

@@ -70,9 +70,9 @@ function analysed(circuit: Circuit, condition: Condition, before: Kept | null): 
     }
     case "sweep": {
       const point = operatingPoint(circuit, condition, null, before);
-      const swept = sweep(circuit, condition, analysis, point.kept ?? before);
+      const swept = sweep(circuit, condition, analysis, point, before);
       const result = { ...resultOf(condition, point), sweep: swept.sweep };
-      return answered(condition, [...point.faults, ...swept.faults], result, swept.kept);
+      return answered(condition, swept.faults, result, swept.kept);
     }
     case "transient": {
       const { point, transient, faults } = courseInTime(circuit, condition, analysis, before);

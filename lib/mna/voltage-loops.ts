@@ -5,6 +5,8 @@ import type { Network } from "./network";
 export interface VoltageLoop {
   /** The part that closes it. */
   readonly closing: string;
+  /** A short with both ends on one net: no current need flow, and nothing is wrong. */
+  readonly harmless: boolean;
   readonly parts: readonly string[];
   readonly nets: readonly string[];
 }
@@ -32,6 +34,7 @@ export function loopsOf(network: Network): readonly VoltageLoop[] {
       const unknowns = new Set([branch, ...way].flatMap((one) => [one.from, one.to]));
       loops.push({
         closing: part.path,
+        harmless: from === to && part.kind !== "voltageSource",
         parts: [...new Set([...way.map((one) => one.part), part.path])],
         nets: [...unknowns].flatMap((unknown) => {
           const name = network.unknowns.names[unknown];

@@ -176,6 +176,25 @@ it("leaves a pin on no net alone: no current, no voltage, and no fault", () => {
   expect(Object.keys(only?.nets ?? {}).toSorted()).toEqual(["B", "C", "GND"]);
 });
 
+it("names what is singular without a loop or an open net, and gives the rest", () => {
+  const sourceOfCurrent = {
+    ref: "G1",
+    kind: "vccs",
+    pins: { plus: "A", minus: "GND", controlPlus: "B", controlMinus: "GND" },
+    params: { transconductance: 1e-3 },
+  };
+  const solved = solveCircuit(circuitOf([...good, sourceOfCurrent]));
+  expect(solved.problems).toMatchObject([{ code: "singular", nets: ["A"], parts: ["G1"] }]);
+  expect(solved.conditions[0]?.nets["A"]).toBeNull();
+  expect(solved.conditions[0]?.nets["C"]).toBeCloseTo(2.5, 9);
+});
+
+it("takes a short with both ends on one net for harmless", () => {
+  const solved = solveCircuit(circuitOf([...good, resistor("R1", "C", "C", 0)]));
+  expect(solved.problems).toEqual([]);
+  expect(solved.conditions[0]?.parts["R1"]?.currents).toEqual({ 1: 0, 2: 0 });
+});
+
 it("says what it cannot solve yet, with the parts", () => {
   const circuit = circuitOf(good, {
     conditions: [{ name: "Spread", spread: { method: "monteCarlo" } }],

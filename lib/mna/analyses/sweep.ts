@@ -2,7 +2,7 @@ import type { Analysis } from "../../circuit/analysis";
 import type { Circuit, Condition } from "../../kinds/circuit";
 import { withParameter } from "../../kinds/with-parameter";
 import type { Fault } from "../diagnosis";
-import { type Kept, operatingPoint } from "../operating-point";
+import { type Kept, type OperatingPoint, operatingPoint } from "../operating-point";
 import type { SweepResult } from "../solution";
 import { Watch } from "./watch";
 
@@ -13,22 +13,23 @@ export function sweep(
   circuit: Circuit,
   condition: Condition,
   analysis: Sweep,
-  first: Kept | null,
+  point: OperatingPoint,
+  before: Kept | null,
 ): { readonly sweep: SweepResult; readonly faults: readonly Fault[]; readonly kept: Kept | null } {
   const { from, to, points } = analysis;
   const watch = new Watch();
   const values: number[] = [];
   const courses = new Map<string, (number | null)[]>(circuit.nets.map((net) => [net, []]));
-  const faults: Fault[] = [];
-  let kept = first;
+  const faults: Fault[] = [...point.faults];
+  let kept = point.kept ?? before;
   for (let k = 0; k < points; k++) {
     const value = k === points - 1 ? to : from + ((to - from) * k) / (points - 1);
     values.push(value);
-    const point = operatingPoint(circuit, at(condition, analysis.of, value), null, kept);
-    for (const [net, course] of courses) course.push(point.nets[net] ?? null);
-    faults.push(...point.faults);
-    if (point.kept === null) continue;
-    kept = point.kept;
+    const one = operatingPoint(circuit, at(condition, analysis.of, value), null, kept);
+    for (const [net, course] of courses) course.push(one.nets[net] ?? null);
+    faults.push(...one.faults);
+    if (one.kept === null) continue;
+    kept = one.kept;
     watch.add(kept.system, kept.x, value, null);
   }
   return {
