@@ -1,0 +1,81 @@
+"use client";
+
+import { useCallback, useEffect, useRef, useState, useSyncExternalStore } from "react";
+import type { Awareness } from "y-protocols/awareness";
+import type * as Y from "yjs";
+import { readDecisions, readFindings } from "../../lib/document/findings";
+import { project } from "../../lib/document/projection";
+import type { Decision, Finding } from "../../lib/review/review-state";
+import type { SaveState } from "../wording/save-words";
+import { connectDesign, type DesignConnection } from "./connect-design.client";
+
+/** Opens a design while the component stands; null until it runs in a browser. */
+export function useDesign(designId: string, userId: string): DesignConnection | null {
+  const [connection, setConnection] = useState<DesignConnection | null>(null);
+  useEffect(() => {
+    const url = `${location.origin.replace(/^http/, "ws")}/doc`;
+    const opened = connectDesign({ designId, userId, url });
+    setConnection(opened);
+    return () => opened.close();
+  }, [designId, userId]);
+  return connection;
+}
+
+/** Whether this page's own edits are stored. */
+export function useSaveState(connection: DesignConnection): SaveState {
+  return useSyncExternalStore(connection.onStatus, connection.status, connection.status);
+}
+
+/** The circuit file that the document stands for now, and what had to be repaired. */
+export function useProjection(doc: Y.Doc): ReturnType<typeof project> {
+  return useReading(doc, project);
+}
+
+export function useFindings(doc: Y.Doc): readonly Finding[] {
+  return useReading(doc, readFindings);
+}
+
+export function useDecisions(doc: Y.Doc): readonly Decision[] {
+  return useReading(doc, readDecisions);
+}
+
+/** What each page that has the design open shows of itself, by client id. */
+export function usePresence(
+  awareness: Awareness,
+): ReadonlyMap<number, Readonly<Record<string, unknown>>> {
+  const held = useRef(new Map(awareness.getStates()));
+  const subscribe = useCallback(
+    (run: () => void) => {
+      const changed = () => {
+        held.current = new Map(awareness.getStates());
+        run();
+      };
+      awareness.on("change", changed);
+      return () => awareness.off("change", changed);
+    },
+    [awareness],
+  );
+  const read = () => held.current;
+  return useSyncExternalStore(subscribe, read, read);
+}
+
+/** A reading of the document, made again after each change. `read` must be the same function each time. */
+function useReading<Value>(doc: Y.Doc, read: (doc: Y.Doc) => Value): Value {
+  const held = useRef<{ readonly doc: Y.Doc; readonly value: Value } | null>(null);
+  const subscribe = useCallback(
+    (run: () => void) => {
+      const changed = () => {
+        held.current = null;
+        run();
+      };
+      doc.on("update", changed);
+      return () => doc.off("update", changed);
+    },
+    [doc],
+  );
+  const snapshot = () => {
+    if (held.current?.doc !== doc) held.current = { doc, value: read(doc) };
+    return held.current.value;
+  };
+  return useSyncExternalStore(subscribe, snapshot, snapshot);
+}
