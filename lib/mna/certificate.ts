@@ -54,6 +54,17 @@ export function holds(certificate: Certificate): boolean {
   );
 }
 
+/** The node unknown whose currents add up worst. */
+export function worstNode(system: System): number {
+  const { sums, largest } = currentsAtNets(system, null);
+  let [worst, most] = [0, -1];
+  for (const node of system.network.unknowns.nodes) {
+    const relative = Math.abs(sums[node] ?? 0) / Math.max(LEAST_CURRENT, largest[node] ?? 0);
+    if (!(relative <= most)) [worst, most] = [node, relative];
+  }
+  return worst;
+}
+
 function currentsAtNets(
   system: System,
   charging: Float64Array | null,

@@ -1,5 +1,5 @@
 import type { Circuit, Condition } from "../kinds/circuit";
-import { certify, holds } from "./certificate";
+import { certify, holds, worstNode } from "./certificate";
 import { type Found, findSolution } from "./continuations";
 import { type Diagnosis, diagnose, diagnoseSingular, type Fault } from "./diagnosis";
 import { type Network, networkOf } from "./network";
@@ -172,8 +172,13 @@ function certified(
 ): OperatingPoint {
   const { system, x } = solution;
   if (holds(certificate)) return { ...reading, certificate, faults: [], kept: { system, x } };
-  const fault: Fault = { code: "notTrusted", nets: [], parts: [] };
-  return { ...nothing(network), certificate, faults: [fault], kept: null };
+  const fault = faultOf(network, { kind: "singular", unknowns: [worstNode(system)] });
+  return {
+    ...nothing(network),
+    certificate,
+    faults: [{ ...fault, code: "notTrusted" }],
+    kept: null,
+  };
 }
 
 /** An operating point of which nothing is known but the reference. */

@@ -3,6 +3,7 @@ import { hasLaw } from "../kinds/laws";
 import { courseInTime } from "./analyses/course-in-time";
 import { sweep } from "./analyses/sweep";
 import type { Fault } from "./diagnosis";
+import { networkOf } from "./network";
 import { type Kept, type OperatingPoint, operatingPoint } from "./operating-point";
 import { problem } from "./problem-sentences";
 import type { ConditionResult, PartResult, SolvedCircuit, SolveProblem } from "./solution";
@@ -11,7 +12,6 @@ import type { ConditionResult, PartResult, SolvedCircuit, SolveProblem } from ".
 export interface SolvedCondition {
   readonly result: ConditionResult;
   readonly problems: readonly SolveProblem[];
-  readonly unknowns: number;
   readonly kept: Kept | null;
 }
 
@@ -38,10 +38,17 @@ export function solveCircuit(
   onProgress?.(all, all);
   return {
     reference: circuit.reference,
-    unknowns: solved[0]?.unknowns ?? 0,
+    unknowns: unknownsOf(circuit),
     conditions: solved.map(({ result }) => result),
     problems: solved.flatMap(({ problems }) => problems),
   };
+}
+
+/** Unknowns of the first condition; 0 where a part of it has no law yet. */
+function unknownsOf(circuit: Circuit): number {
+  const [first] = circuit.conditions;
+  if (first === undefined || first.parts.some((part) => !hasLaw(part.kind))) return 0;
+  return networkOf(circuit, first).unknowns.count;
 }
 
 /** Solves one condition. Never throws for what a circuit may be: it answers with problems. */
@@ -106,7 +113,6 @@ function answered(
   return {
     result: { ...result, status: faults.length === 0 ? "solved" : "unsolvable" },
     problems: faults.map(({ code, nets, parts }) => problem(code, condition.name, nets, parts)),
-    unknowns: kept?.system.size ?? 0,
     kept,
   };
 }
