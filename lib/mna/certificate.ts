@@ -5,7 +5,7 @@ import type { Certificate } from "./solution";
 import type { System } from "./system";
 
 /** What a solution must reach to be one. */
-export const certificateLimits = {
+const certificateLimits = {
   kclResidual: 1e-6,
   powerBalance: 1e-6,
   errorBound: 1e-3,

@@ -8,7 +8,7 @@ import { type Reading, readSolution } from "./part-results";
 import { heatedTemperatures } from "./self-heating";
 import { settled } from "./settle";
 import type { Certificate } from "./solution";
-import { type Bent, System } from "./system";
+import { type Bent, System, unbent } from "./system";
 import { undetermined } from "./undetermined";
 
 /** A solved network, from which the next condition may start. */
@@ -63,7 +63,7 @@ function solveNetwork(
   time: number | null,
   before: Kept | null,
 ): OperatingPoint {
-  const system = new System(network, { held: new Map(), opened: new Set() }, null);
+  const system = new System(network, unbent, null);
   system.stage.time = time;
   const diagnosis = diagnose(network, system.stage);
   const solution = solveBent(network, diagnosis.bent, condition, time, before);

@@ -18,14 +18,14 @@ export function pinCurrents(placed: PlacedPart, charging: Float64Array | null): 
 }
 
 /** V, first pin minus second; null for a part with fewer than two. */
-export function partVoltage(placed: PlacedPart, x: Float64Array): number | null {
+function partVoltage(placed: PlacedPart, x: Float64Array): number | null {
   const [first, second] = voltagePins.get(placed.part.kind) ?? placed.pins;
   if (first === undefined || second === undefined) return null;
   return pinVoltage(placed, x, first) - pinVoltage(placed, x, second);
 }
 
 /** V, at one pin. */
-export function pinVoltage(placed: PlacedPart, x: Float64Array, pin: string): number {
+function pinVoltage(placed: PlacedPart, x: Float64Array, pin: string): number {
   return x[placed.law.terminals[placed.pins.indexOf(pin)] ?? 0] ?? 0;
 }
 

@@ -1,6 +1,7 @@
 import type { SolveProblem, SolveProblemCode } from "./solution";
 
 const MOST_NAMED = 8;
+const NO_PARTS = "its parts";
 
 const sentences: {
   readonly [Code in SolveProblemCode]: (nets: string, parts: string) => string;
@@ -21,7 +22,9 @@ const sentences: {
   stepTooSmall: (nets, parts) =>
     `The course in time could not be followed: ${nets} changes faster than the smallest step. Look at ${parts}.`,
   notYetSolved: (_, parts) =>
-    `The engine cannot solve this yet${parts === "its parts" ? "" : `: it has no law for ${parts}`}.`,
+    parts === NO_PARTS
+      ? "The engine gives the operating point alone: frequency responses and spreads cannot be solved yet."
+      : `The engine has no law yet for ${parts}; leave them out ("fitted": false) to solve the rest.`,
 };
 
 /** A problem row with its sentence. */
@@ -31,7 +34,7 @@ export function problem(
   nets: readonly string[],
   parts: readonly string[],
 ): SolveProblem {
-  const message = sentences[code](listed(nets, "a net inside a part"), listed(parts, "its parts"));
+  const message = sentences[code](listed(nets, "a net inside a part"), listed(parts, NO_PARTS));
   return { code, message, condition, nets, parts };
 }
 

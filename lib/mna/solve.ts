@@ -52,7 +52,7 @@ function unknownsOf(circuit: Circuit): number {
 }
 
 /** Solves one condition. Never throws for what a circuit may be: it answers with problems. */
-export function solveCondition(
+function solveCondition(
   circuit: Circuit,
   condition: Condition,
   before: Kept | null = null,
@@ -62,10 +62,8 @@ export function solveCondition(
     return refused(circuit, condition, { code: "notYetSolved", nets: [], parts: lawless });
   if (condition.parts.length > MOST_PARTS)
     return refused(circuit, condition, { code: "tooLarge", nets: [], parts: [] });
-  if (condition.spread !== null)
-    return refused(circuit, condition, { code: "notYetSolved", nets: [], parts: [] });
-
-  return analysed(circuit, condition, before);
+  const solved = analysed(circuit, condition, before);
+  return condition.spread === null ? solved : notYet(condition, solved);
 }
 
 function analysed(circuit: Circuit, condition: Condition, before: Kept | null): SolvedCondition {
@@ -85,9 +83,23 @@ function analysed(circuit: Circuit, condition: Condition, before: Kept | null): 
       const { point, transient, faults } = courseInTime(circuit, condition, analysis, before);
       return answered(condition, faults, { ...resultOf(condition, point), transient }, point.kept);
     }
-    case "frequencyResponse":
-      return refused(circuit, condition, { code: "notYetSolved", nets: [], parts: [] });
+    case "frequencyResponse": {
+      const point = operatingPoint(circuit, condition, null, before);
+      const result = resultOf(condition, point);
+      return notYet(condition, answered(condition, point.faults, result, point.kept));
+    }
   }
+}
+
+/** The operating point stands, but what else is asked for cannot be computed yet: never silently. */
+function notYet(condition: Condition, solved: SolvedCondition): SolvedCondition {
+  const row = problem("notYetSolved", condition.name, [], []);
+  if (solved.problems.some(({ code }) => code === row.code)) return solved;
+  return {
+    result: { ...solved.result, status: "unsolvable" },
+    problems: [...solved.problems, row],
+    kept: solved.kept,
+  };
 }
 
 function resultOf(condition: Condition, point: OperatingPoint): ConditionResult {

@@ -24,6 +24,7 @@ export interface Bent {
   readonly opened: ReadonlySet<string>;
 }
 
+/** Nothing is singular. */
 export const unbent: Bent = { held: new Map(), opened: new Set() };
 
 /** The unknown (numbered from 1) at which the matrix has no pivot. */

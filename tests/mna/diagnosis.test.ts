@@ -202,5 +202,14 @@ it("says what it cannot solve yet, with the parts", () => {
   const solved = solveCircuit(circuit);
   expect(solved.problems.map(({ code }) => code)).toEqual(["notYetSolved"]);
   expect(solved.conditions[0]?.status).toBe("unsolvable");
-  expect(solved.conditions[0]?.nets["GND"]).toBe(0);
+  expect(solved.conditions[0]?.nets["C"]).toBeCloseTo(2.5, 9);
+  const regulator = {
+    ref: "U1",
+    kind: "linearRegulator",
+    pins: { in: "B", out: "D", common: "GND" },
+    params: { outputVoltage: 3.3 },
+  };
+  const lawless = solveCircuit(circuitOf([...good, regulator]));
+  expect(lawless.problems).toMatchObject([{ code: "notYetSolved", parts: ["U1"] }]);
+  expect(lawless.conditions[0]?.nets).toEqual({ GND: 0, B: null, C: null, D: null });
 });

@@ -4,7 +4,7 @@ import { diagnose, type Fault } from "../diagnosis";
 import { networkOf } from "../network";
 import { type Kept, type OperatingPoint, operatingPoint, unsolved } from "../operating-point";
 import type { TransientResult } from "../solution";
-import { System } from "../system";
+import { System, unbent } from "../system";
 import { transient } from "./transient";
 
 type Transient = Extract<Analysis, { type: "transient" }>;
@@ -50,7 +50,7 @@ function systemFor(circuit: Circuit, condition: Condition, point: OperatingPoint
     return system;
   }
   const network = networkOf(circuit, condition);
-  const { stage } = new System(network, { held: new Map(), opened: new Set() }, null);
+  const { stage } = new System(network, unbent, null);
   const { held } = diagnose(network, stage).bent;
   const system = new System(network, { held, opened: new Set() }, null);
   system.holding = HOLDING;
