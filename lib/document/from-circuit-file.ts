@@ -36,7 +36,7 @@ export function writeCircuitFile(doc: Y.Doc, file: CircuitFile, newId: () => str
     let born = 0;
     for (const [name, block] of Object.entries(file.blocks)) {
       topLevel(doc, "blocks").set(name, {
-        ports: block.ports ?? [],
+        ...(block.ports !== undefined && { ports: block.ports }),
         size: block.sheet?.size ?? placeParts(block).sheet.size,
       });
       const { placings } = placeParts(block);

@@ -61,7 +61,7 @@ export function projectBlock(
     "junction" in end ? end : { part: byId.get(end.part)?.designator ?? end.part, pin: end.pin };
   return {
     block: {
-      ...(Array.isArray(ports) && ports.length > 0 && { ports: ports.filter(isText) }),
+      ...(Array.isArray(ports) && { ports: ports.filter(isText) }),
       parts: parts.map((part) => filePart(part, named.netOfPin, byId)),
       wires: wires.map(({ a, b }): Wire => ({ a: fileEnd(a), b: fileEnd(b) })),
       sheet: {

@@ -1,3 +1,4 @@
+import { readFileSync } from "node:fs";
 import { expect, it } from "vitest";
 import * as Y from "yjs";
 import type { CircuitFile } from "../../lib/circuit/circuit-file";
@@ -91,4 +92,14 @@ it("gives the same bytes for the same state, whatever the order of merging", () 
     seen.add(JSON.stringify([file, problems]));
   }
   expect(seen.size).toBe(1);
+});
+
+it("keeps the electrical digest of a drawn board", () => {
+  for (const letter of ["A", "B", "C"]) {
+    const text = readFileSync(`prisma/demo/ffc-2-${letter}.json`, "utf8");
+    const file: CircuitFile = JSON.parse(text);
+    const back = project(written(file));
+    expect(back.problems).toEqual([]);
+    expect(circuitOf(back.file).electricalDigest).toBe(circuitOf(file).electricalDigest);
+  }
 });
