@@ -2,7 +2,7 @@
 import type { CircuitFile } from "../circuit/circuit-file";
 import type { Comparison } from "../comparison/comparison";
 import type { CircuitResult } from "../stress/circuit-result";
-import type { Decision, Role } from "./review-state";
+import type { Decision, Finding, Role } from "./review-state";
 
 export interface PersonView {
   readonly id: string;
@@ -60,8 +60,12 @@ export interface ReviewView {
   readonly baseResult: CircuitResult | null;
   readonly comparisonRun: RunView;
   readonly comparison: Comparison | null;
+  /** As stored when the page was made; the live ones come through the shared document. A released revision's are fixed. */
+  readonly findings: readonly Finding[];
   readonly decisions: readonly Decision[];
   readonly newerUnderReview: readonly string[];
+  /** Digests that a signature given now would bind. */
+  readonly bound: Readonly<Record<string, string | null>>;
 }
 
 /** The live draft of a design. */
