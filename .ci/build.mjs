@@ -36,6 +36,7 @@ function programs() {
   return [
     "lib/server/main.ts",
     "lib/server/supervisor.ts",
+    "lib/server/seed.ts",
     "lib/jobs/worker.ts",
     ...threads.filter((name) => name.endsWith("-thread.ts")).map((name) => `lib/jobs/${name}`),
   ].filter((file) => existsSync(file));

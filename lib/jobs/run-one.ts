@@ -83,8 +83,11 @@ export class RunComputer {
   }
 }
 
-/** Beside this program when it is built; its source when it is run from source. */
+/** Built, it stands in `jobs` beside or next to the program that bundles this file; from source, beside this file. */
 function threadFile(): string {
-  const built = fileURLToPath(new URL("./solving-thread.js", import.meta.url));
-  return existsSync(built) ? built : fileURLToPath(new URL("./solving-thread.ts", import.meta.url));
+  const places = ["./solving-thread.js", "../jobs/solving-thread.js", "./solving-thread.ts"];
+  const files = places.map((place) => fileURLToPath(new URL(place, import.meta.url)));
+  const found = files.find((file) => existsSync(file));
+  if (found === undefined) throw new Error("The solving thread's program is not built");
+  return found;
 }

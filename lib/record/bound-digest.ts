@@ -40,9 +40,16 @@ export function boundDigests(things: BoundThings): BoundDigests {
   };
 }
 
-/** The one digest that a signature stores: over all bound digests and the signature's meaning. */
+/**
+ * The one digest that a signature stores: over the bound digests and the signature's meaning. An
+ * author vouches for the circuit as it was submitted; findings and decisions come afterwards, and
+ * bind those who review and approve.
+ */
 export function boundDigest(digests: BoundDigests, meaning: string): string {
-  return digest({ ...digests, meaning });
+  const { circuit, base, results, policy } = digests;
+  return meaning === "authored"
+    ? digest({ circuit, base, results, policy, meaning })
+    : digest({ ...digests, meaning });
 }
 
 function byId(a: { readonly id: string }, b: { readonly id: string }): number {

@@ -1,5 +1,6 @@
 import { digest } from "../circuit/digest";
-import { compare } from "../comparison/compare";
+import { compare, type Side } from "../comparison/compare";
+import { isCircuitFile } from "../comparison/read-side";
 import { readCircuitFile } from "../kinds/read-circuit";
 import { judge } from "../stress/judge";
 import { auditChainFault } from "./audit-chain";
@@ -142,34 +143,23 @@ function auditCheck(record: CheckableRecord): RecordCheck {
 }
 
 function solvedAgainChecks(record: CheckableRecord): readonly RecordCheck[] {
-  const proposed = readCircuitFile(record.revision.circuit);
-  if (!proposed.ok)
-    return [
-      broken(
-        "results",
-        `The circuit cannot be read: ${proposed.error[0]?.message ?? "no reason given"}`,
-      ),
-    ];
-  const solved = judge(proposed.value, { everyCondition: true });
+  const proposed = sideOf(record.revision.circuit);
+  if (proposed === null) return [broken("results", "The circuit cannot be read.")];
+  const solved = judge(proposed.circuit, { everyCondition: true });
   const differences = numberDifferences(record.result, solved);
-  const checks = [
+  const results =
     differences.length === 0
       ? held("results", `Solved again (engine ${solved.engine}): every number agrees.`)
       : broken(
           "results",
           `Solved again (engine ${solved.engine}): ${differences.length} numbers differ, first ${differences[0] ?? ""}.`,
-        ),
-  ];
-  if (record.base === null || record.comparison === null) return checks;
-  const base = readCircuitFile(record.base.circuit);
-  if (!base.ok) return [...checks, broken("comparison", "The base circuit cannot be read.")];
-  const again = compare(
-    { file: record.base.circuit, circuit: base.value },
-    { file: record.revision.circuit, circuit: proposed.value },
-  );
-  const moved = numberDifferences(record.comparison, again);
+        );
+  if (record.base === null || record.comparison === null) return [results];
+  const base = sideOf(record.base.circuit);
+  if (base === null) return [results, broken("comparison", "The base circuit cannot be read.")];
+  const moved = numberDifferences(record.comparison, compare(base, proposed));
   return [
-    ...checks,
+    results,
     moved.length === 0
       ? held("comparison", "Compared again: every shift and cause agrees.")
       : broken(
@@ -177,6 +167,12 @@ function solvedAgainChecks(record: CheckableRecord): readonly RecordCheck[] {
           `Compared again: ${moved.length} numbers differ, first ${moved[0] ?? ""}.`,
         ),
   ];
+}
+
+function sideOf(file: unknown): Side | null {
+  if (!isCircuitFile(file)) return null;
+  const circuit = readCircuitFile(file);
+  return circuit.ok ? { file, circuit: circuit.value } : null;
 }
 
 function held(check: RecordCheck["check"], message: string): RecordCheck {

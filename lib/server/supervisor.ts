@@ -1,6 +1,7 @@
 /** What `npm start` does once everything is built: database, server, worker, and their end in order. */
 import type { ChildProcess } from "node:child_process";
 import { randomBytes } from "node:crypto";
+import { once } from "node:events";
 import { existsSync, mkdirSync, readFileSync, writeFileSync } from "node:fs";
 import { join, resolve } from "node:path";
 import { setTimeout as pause } from "node:timers/promises";
@@ -71,6 +72,12 @@ async function runPrograms(
   how: Pick<Program, "development" | "environment">,
   stopping: AbortSignal,
 ): Promise<number> {
+  if (process.env["AMPERSIGN_DEMO"] !== "no" && !(await seeded(how))) {
+    say(
+      "The demo could not be seeded; the reason stands above. AMPERSIGN_DEMO=no starts without it.",
+    );
+    return 1;
+  }
   const server = startProgram({ ...how, name: "server/main" });
   const url = await readiness(server, stopping);
   if (url === undefined) {
@@ -87,6 +94,13 @@ async function runPrograms(
   serverIsGone.abort();
   await workers;
   return 0;
+}
+
+/** Fills an empty database with the demo; one with data is left as it is. */
+async function seeded(how: Pick<Program, "development" | "environment">): Promise<boolean> {
+  const seed = startProgram({ ...how, name: "server/seed" });
+  const [code] = await once(seed, "exit");
+  return code === 0;
 }
 
 /** The address, once the server answers; undefined if it ended before, having said why itself. */
