@@ -12,6 +12,7 @@ export function Register(props: { readonly view: RegisterView }) {
   const firstName = view.me.name.split(" ")[0] ?? view.me.name;
   return (
     <main className="register">
+      <HatchOver />
       <div className="rframe">
         <Zones />
         <div className="rin">
@@ -162,6 +163,25 @@ function Zones() {
         </div>
       ))}
     </>
+  );
+}
+
+/** The pattern of what is over a limit; bars of the table and of the key refer to it. */
+function HatchOver() {
+  return (
+    <svg className="sr" aria-hidden="true">
+      <defs>
+        <pattern
+          id="hatch-over"
+          width="4"
+          height="4"
+          patternUnits="userSpaceOnUse"
+          patternTransform="rotate(45)"
+        >
+          <path className="pat-over" d="M0 0V4" />
+        </pattern>
+      </defs>
+    </svg>
   );
 }
 

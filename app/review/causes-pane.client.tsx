@@ -14,6 +14,19 @@ export function CausesPane(props: { readonly comparison: Comparison; readonly co
   }
   return (
     <>
+      <svg className="sr" aria-hidden="true">
+        <defs>
+          <pattern
+            id="hatch-ink"
+            width="4"
+            height="4"
+            patternUnits="userSpaceOnUse"
+            patternTransform="rotate(45)"
+          >
+            <path d="M0 0V4" stroke="var(--ink)" strokeWidth="1.6" />
+          </pattern>
+        </defs>
+      </svg>
       <ul className="causes">
         {groups.map((group) => (
           <CauseGroup key={group.subject} group={group} words={words} />
