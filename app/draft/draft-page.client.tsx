@@ -2,9 +2,9 @@
 
 import type { DraftView } from "../../lib/review/views";
 import { useDesign } from "../collaboration/use-design.client";
-import type { Deed } from "../dialog/deed";
 import { Mast } from "../mast/mast";
 import { DraftBoard } from "./draft-board.client";
+import type { FreezeDeed } from "./freeze-deed";
 
 /** The draft of a design: drawn together, solved as it changes. */
 export function DraftPage(props: {
@@ -24,8 +24,3 @@ export function DraftPage(props: {
     );
   return <DraftBoard view={view} connection={connection} freeze={props.freeze} />;
 }
-
-/** Freezing gives a letter, or says why not. */
-export type FreezeDeed =
-  | { readonly done: true; readonly letter: string }
-  | Extract<Deed, { done: false }>;

@@ -4,7 +4,7 @@ import { useRouter } from "next/navigation";
 import type { DraftView } from "../../lib/review/views";
 import { ReasonDialog } from "../dialog/reason-dialog.client";
 import type { SaveState } from "../wording/save-words";
-import type { FreezeDeed } from "./draft-page.client";
+import type { FreezeDeed } from "./freeze-deed";
 
 /** Freezing the draft as a revision: the change note, then on to the review. */
 export function FreezeDialog(props: {

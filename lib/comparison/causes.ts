@@ -4,7 +4,7 @@ import type { ConditionResult } from "../mna/solution";
 import type { StressRow } from "../stress/circuit-result";
 import { stressRows } from "../stress/stress-rows";
 import type { Cause, ComparisonProblem, NetShift, StressShift } from "./comparison";
-import type { FileEdit } from "./file-edits";
+import type { FileEdit } from "./file-edit";
 import { pointResults } from "./point";
 import { grayCodeSubsets, shapleyShares } from "./shapley";
 

@@ -1,17 +1,8 @@
 import type { CircuitFile, FilePart } from "../circuit/circuit-file";
-import type { Edit } from "./comparison";
+import type { FileEdit } from "./file-edit";
 import { conditionEdits, limitEdits, policyEdits } from "./judgement-edits";
 import { type Matching, partName } from "./matching";
 import { sameWritten } from "./same-written";
-
-/** An edit that can be made on the base alone: what causes are computed with. */
-export interface FileEdit {
-  readonly edit: Edit;
-  /** The file with this edit made. Edits touch different places, so they can be made in any order. */
-  readonly apply: (file: CircuitFile) => CircuitFile;
-  /** Whether it can move a voltage. */
-  readonly electrical: boolean;
-}
 
 /**
  * The edits between two files whose names agree (see `renameBase`): parts added and removed, values,

@@ -1,5 +1,5 @@
 import type { CircuitFile, FileCondition, FileLimit } from "../circuit/circuit-file";
-import type { FileEdit } from "./file-edits";
+import type { FileEdit } from "./file-edit";
 
 const NOMINAL: FileCondition = { name: "Nominal" };
 

@@ -1,11 +1,12 @@
 import { resolve, sep } from "node:path";
-import pdfmake from "pdfmake";
-import type { Content, TableCell, TDocumentDefinitions } from "pdfmake/interfaces";
+import pdfmake, { type Content, type TableCell } from "pdfmake";
 import type { OutlineBlock, OutlineCell, RecordOutline } from "../record/record-outline";
 
 /** The complete IBM Plex files that the pages use too; the library's own fonts lack arrows and ticks. */
 const FONT_FOLDER = resolve("app/look/fonts");
 const font = (file: string): string => resolve(FONT_FOLDER, file);
+
+type DocumentDefinition = Parameters<typeof pdfmake.createPdf>[0];
 
 const FONTS = {
   Sans: { normal: font("ibm-plex-sans-400.woff2"), bold: font("ibm-plex-sans-600.woff2") },
@@ -28,7 +29,7 @@ export async function recordPdf(outline: RecordOutline): Promise<Uint8Array> {
   return new Uint8Array(await pdfmake.createPdf(documentOf(outline)).getBuffer());
 }
 
-function documentOf(outline: RecordOutline): TDocumentDefinitions {
+function documentOf(outline: RecordOutline): DocumentDefinition {
   return {
     pageSize: "A4",
     pageMargins: [mm(25), mm(16), mm(15), mm(26)],

@@ -52,6 +52,7 @@ export function drawWires(
   for (const label of block.sheet?.labels ?? []) {
     const from = place(label.end);
     if (from === null || (only !== null && !touches(label.end, only))) continue;
+    if (isPlaceless(label, from.at)) continue;
     reached.add(endKey(label.end));
     if (label.shape !== "name") {
       meetings.add(from.at);
@@ -119,4 +120,9 @@ function sideOf(flag: Point, from: Point): Point {
 /** A wire may touch a part at its edge, where the pins are. */
 function body(box: Box): Box {
   return grown(box, -1);
+}
+
+/** A name that stands on its end has no place of its own: the net is lettered where it is clear. */
+function isPlaceless(label: NetLabel, [x, y]: Point): boolean {
+  return label.shape === "name" && label.at[0] === x && label.at[1] === y;
 }

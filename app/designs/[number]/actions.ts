@@ -4,7 +4,7 @@ import { headers } from "next/headers";
 import { z } from "zod";
 import { freezeRevision } from "../../../lib/server/commands/freeze-revision";
 import { actingMember } from "../../../lib/server/sign-in";
-import type { FreezeDeed } from "../../draft/draft-page.client";
+import type { FreezeDeed } from "../../draft/freeze-deed";
 import { freezeRefusal } from "../../wording/freezing";
 import { signedOut } from "../../wording/refusals";
 

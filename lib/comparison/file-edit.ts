@@ -1,0 +1,11 @@
+import type { CircuitFile } from "../circuit/circuit-file";
+import type { Edit } from "./comparison";
+
+/** An edit that can be made on the base alone: what causes are computed with. */
+export interface FileEdit {
+  readonly edit: Edit;
+  /** The file with this edit made. Edits touch different places, so they can be made in any order. */
+  readonly apply: (file: CircuitFile) => CircuitFile;
+  /** Whether it can move a voltage. */
+  readonly electrical: boolean;
+}
