@@ -19,6 +19,7 @@ export default {
     "pg-boss",
     "piscina",
     "pdfmake",
+    "wawoff2",
     "pino",
   ],
   turbopack: { root: import.meta.dirname },

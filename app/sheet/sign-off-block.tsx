@@ -66,7 +66,7 @@ function SignedOn({ line, right, y, onSign }: SignedOnProps) {
   }
   return (
     <DrawnButton
-      className="sign off"
+      className="sign"
       label={`Sign: ${line.meaning.toLowerCase()}`}
       reachable
       onAct={onSign}

@@ -7,6 +7,6 @@ export const criterionWords: Readonly<Record<CriterionId, string>> = {
   stress: "Stress margins met or waived",
   ratings: "Ratings complete for the rules",
   findings: "Major findings closed",
-  checked: "Changed items checked by another",
+  checked: "Changed items checked",
   newest: "No newer revision under review",
 };

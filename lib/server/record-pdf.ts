@@ -1,18 +1,9 @@
 import { resolve, sep } from "node:path";
 import pdfmake, { type Content, type TableCell } from "pdfmake";
 import type { OutlineBlock, OutlineCell, RecordOutline } from "../record/record-outline";
-
-/** The complete IBM Plex files that the pages use too; the library's own fonts lack arrows and ticks. */
-const FONT_FOLDER = resolve("app/look/fonts");
-const font = (file: string): string => resolve(FONT_FOLDER, file);
+import { recordFonts } from "./record-fonts";
 
 type DocumentDefinition = Parameters<typeof pdfmake.createPdf>[0];
-
-const FONTS = {
-  Sans: { normal: font("ibm-plex-sans-400.woff2"), bold: font("ibm-plex-sans-600.woff2") },
-  Cond: { normal: font("ibm-plex-cond-500.woff2") },
-  Mono: { normal: font("ibm-plex-mono-500.woff2") },
-};
 
 const INK = "#1b242e";
 const INK_2 = "#4b5661";
@@ -23,9 +14,10 @@ const mm = (millimetres: number): number => (millimetres * 72) / 25.4;
 
 /** Prints a record's outline as PDF on A4 with ISO 5457 margins; the digest and the key's thumbprint stand in section 9. */
 export async function recordPdf(outline: RecordOutline): Promise<Uint8Array> {
-  pdfmake.setFonts(FONTS);
+  const { folder, families } = await recordFonts();
+  pdfmake.setFonts({ ...families });
   pdfmake.setUrlAccessPolicy(() => false);
-  pdfmake.setLocalAccessPolicy((path) => resolve(path).startsWith(FONT_FOLDER + sep));
+  pdfmake.setLocalAccessPolicy((path) => resolve(path).startsWith(folder + sep));
   return new Uint8Array(await pdfmake.createPdf(documentOf(outline)).getBuffer());
 }
 
@@ -152,7 +144,8 @@ function tableContent(block: Extract<OutlineBlock, { kind: "table" }>): Content 
   };
 }
 
-const MARKS = { met: "✓ ", notMet: "✗ ", unknown: "? " } as const;
+/** The lettering has a tick, but no cross of its own: the multiplication sign serves. */
+const MARKS = { met: "✓ ", notMet: "× ", unknown: "? " } as const;
 
 function cellContent(cell: OutlineCell): TableCell {
   const number = cell.look === "number" || cell.look === "struck" || cell.look === "worse";

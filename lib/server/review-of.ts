@@ -72,7 +72,13 @@ export async function reviewOf(
   const comparison = comparisonRun?.result == null ? null : storedComparison(comparisonRun.result);
   const file = storedCircuit(revision.circuit);
   const newerUnderReview = revisions
-    .filter((one) => one.frozenAt > revision.frozenAt && one.state === "underReview")
+    .filter(
+      (one) =>
+        // What came after a release does not undo it.
+        revision.releasedAt === null &&
+        one.frozenAt > revision.frozenAt &&
+        one.state === "underReview",
+    )
     .map((one) => one.letter);
   return ok({
     design: design.value,
