@@ -21,9 +21,7 @@ export class PostgresDocumentStore {
   ) {}
 
   /** The stored document; null: there is no such design. */
-  async load(
-    designId: string,
-  ): Promise<{
+  async load(designId: string): Promise<{
     readonly snapshot: Uint8Array | null;
     readonly updates: readonly StoredUpdate[];
   } | null> {
