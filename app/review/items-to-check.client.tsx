@@ -1,5 +1,6 @@
 "use client";
 
+import { useState } from "react";
 import type { Edit } from "../../lib/comparison/comparison";
 import { editWords } from "./edit-words";
 
@@ -9,9 +10,16 @@ export function ItemsToCheck(props: {
   /** Who checked each item, by the edit's id. */
   readonly checkedBy: ReadonlyMap<string, string>;
   /** Null for one who may not check: an author, or one without the right. */
-  readonly onCheck: ((item: string, checked: boolean) => void) | null;
+  readonly onCheck: ((item: string, checked: boolean) => Promise<void>) | null;
   readonly onSelect: (part: string) => void;
 }) {
+  // What was ticked here a moment ago and the server has not answered yet.
+  const [asked, setAsked] = useState<ReadonlyMap<string, boolean>>(new Map());
+  const ask = async (item: string, checked: boolean): Promise<void> => {
+    setAsked((held) => new Map([...held, [item, checked]]));
+    await props.onCheck?.(item, checked);
+    setAsked((held) => new Map([...held].filter(([one]) => one !== item)));
+  };
   const done = props.items.filter((item) => props.checkedBy.has(item.id)).length;
   return (
     <section className="items">
@@ -26,9 +34,9 @@ export function ItemsToCheck(props: {
               <label>
                 <input
                   type="checkbox"
-                  checked={by !== undefined}
-                  disabled={props.onCheck === null}
-                  onChange={(event) => props.onCheck?.(item.id, event.target.checked)}
+                  checked={asked.get(item.id) ?? by !== undefined}
+                  disabled={props.onCheck === null || asked.has(item.id)}
+                  onChange={(event) => void ask(item.id, event.target.checked)}
                 />
                 <span>{editWords(item)}</span>
               </label>

@@ -4,6 +4,7 @@ import { useMemo, useState } from "react";
 import { conditionMargins } from "../../lib/review/condition-margins";
 import type { ReviewView } from "../../lib/review/views";
 import { drawSheet } from "../../lib/sheet/layout";
+import type { Deed } from "../dialog/deed";
 import { Mast } from "../mast/mast";
 import { Presence } from "../mast/presence";
 import { SaveMark } from "../mast/save-mark";
@@ -130,17 +131,9 @@ export function ReviewPage(props: { readonly view: ReviewView; readonly actions:
             checkedBy={standing.checkedBy}
             onCheck={
               standing.mayCheck
-                ? (item, checked) => {
-                    // The answer comes back through the shared document; a refusal is said in a dialog.
-                    actions
-                      .check(item, checked)
-                      .then(
-                        (deed) =>
-                          !deed.done && setAsked({ kind: "refusal", message: deed.message }),
-                      )
-                      .catch(() =>
-                        setAsked({ kind: "refusal", message: "The server is away; try again." }),
-                      );
+                ? async (item, checked) => {
+                    const deed = await actions.check(item, checked).catch(() => AWAY);
+                    if (!deed.done) setAsked({ kind: "refusal", message: deed.message });
                   }
                 : null
             }
@@ -195,6 +188,8 @@ export function ReviewPage(props: { readonly view: ReviewView; readonly actions:
     </>
   );
 }
+
+const AWAY: Deed = { done: false, message: "The server is away. Nothing was decided; try again." };
 
 /** The net's voltage in the base and the proposed revision. */
 function historyOf(view: ReviewView, net: string | null, condition: string) {
