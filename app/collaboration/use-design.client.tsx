@@ -1,11 +1,8 @@
 "use client";
 
 import { useCallback, useEffect, useRef, useState, useSyncExternalStore } from "react";
-import type { Awareness } from "y-protocols/awareness";
 import type * as Y from "yjs";
-import { readDecisions, readFindings } from "../../lib/document/findings";
 import { project } from "../../lib/document/projection";
-import type { Decision, Finding } from "../../lib/review/review-state";
 import type { SaveState } from "../wording/save-words";
 import { connectDesign, type DesignConnection } from "./connect-design.client";
 
@@ -29,34 +26,6 @@ export function useSaveState(connection: DesignConnection): SaveState {
 /** The circuit file that the document stands for now, and what had to be repaired. */
 export function useProjection(doc: Y.Doc): ReturnType<typeof project> {
   return useReading(doc, project);
-}
-
-export function useFindings(doc: Y.Doc): readonly Finding[] {
-  return useReading(doc, readFindings);
-}
-
-export function useDecisions(doc: Y.Doc): readonly Decision[] {
-  return useReading(doc, readDecisions);
-}
-
-/** What each page that has the design open shows of itself, by client id. */
-export function usePresence(
-  awareness: Awareness,
-): ReadonlyMap<number, Readonly<Record<string, unknown>>> {
-  const held = useRef(new Map(awareness.getStates()));
-  const subscribe = useCallback(
-    (run: () => void) => {
-      const changed = () => {
-        held.current = new Map(awareness.getStates());
-        run();
-      };
-      awareness.on("change", changed);
-      return () => awareness.off("change", changed);
-    },
-    [awareness],
-  );
-  const read = () => held.current;
-  return useSyncExternalStore(subscribe, read, read);
 }
 
 /** A reading of the document, made again after each change. `read` must be the same function each time. */

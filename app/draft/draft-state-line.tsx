@@ -13,7 +13,7 @@ export function DraftStateLine(props: {
       ? (answer.result.conditions.find((one) => one.name === condition)?.certificate ?? null)
       : null;
   return (
-    <footer className="state" role="status">
+    <div className="state" role="status">
       {certificate !== null && !stale && <span className="lamp" aria-hidden="true" />}
       <b>{stateWords(answer, stale)}</b>
       {certificate !== null && (
@@ -32,7 +32,7 @@ export function DraftStateLine(props: {
       <span className="right">
         Preview, computed in this browser; a revision is solved again on the server
       </span>
-    </footer>
+    </div>
   );
 }
 

@@ -37,7 +37,7 @@ export function PartsDrawer(props: {
         if (members.length === 0) return null;
         return (
           <section key={group}>
-            <h3 className="cap">{heading}</h3>
+            <h2 className="cap">{heading}</h2>
             <ul>
               {members.map((kind) => (
                 <li key={kind}>

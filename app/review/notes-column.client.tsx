@@ -10,6 +10,7 @@ import { Note, type NoteFacts } from "./note.client";
 import type { Asked } from "./review-dialogs.client";
 import type { ReviewStanding } from "./review-standing";
 import type { ReviewSession } from "./session";
+import { WaiverList } from "./waiver-list.client";
 
 /** The slips beside the sheet: findings by number, then what changed and who checked it. */
 export function NotesColumn(props: {
@@ -56,6 +57,16 @@ export function NotesColumn(props: {
           </p>
         )}
         {props.children}
+        <WaiverList
+          decisions={session.decisions}
+          result={view.result}
+          nameOf={nameOf}
+          onWithdraw={
+            standing.open && view.me.roles.includes("approver")
+              ? (waiver) => props.onAsk({ kind: "withdraw", waiver })
+              : undefined
+          }
+        />
         {standing.mayReturn && (
           <button type="button" className="btn" onClick={() => props.onAsk({ kind: "return" })}>
             Return revision …

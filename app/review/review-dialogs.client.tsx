@@ -22,6 +22,7 @@ export type Asked =
   | { readonly kind: "reopen"; readonly finding: string; readonly number: number }
   | { readonly kind: "waive"; readonly row: StressRow }
   | { readonly kind: "waiveLimit"; readonly row: LimitRow }
+  | { readonly kind: "withdraw"; readonly waiver: string }
   | { readonly kind: "sign"; readonly meaning: Meaning }
   | { readonly kind: "return" }
   | { readonly kind: "refusal"; readonly message: string };
@@ -111,6 +112,17 @@ export function ReviewDialogs(props: {
               reason,
             )
           }
+          onClose={onClose}
+        />
+      );
+    case "withdraw":
+      return (
+        <ReasonDialog
+          title={`Withdraw ${asked.waiver}`}
+          explanation="What it covered stands open again in every revision under review."
+          label="Reason"
+          action="Withdraw waiver"
+          onDo={(reason) => actions.withdraw(asked.waiver, reason)}
           onClose={onClose}
         />
       );

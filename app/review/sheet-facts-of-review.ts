@@ -2,6 +2,7 @@ import { limitMargin } from "../../lib/review/limit-words";
 import type { Finding } from "../../lib/review/review-state";
 import type { ReviewView } from "../../lib/review/views";
 import type { FindingMark, NetReading, PartReading, SheetFacts } from "../../lib/sheet/sheet-facts";
+import { formatFixed } from "../../lib/values/format-quantity";
 import { shiftWords, voltageWords } from "../wording/numbers";
 import type { NetRow } from "./net-rows";
 import type { StressLine } from "./stress-lines";
@@ -53,7 +54,7 @@ function partReading(line: StressLine, condition: string): readonly PartReading[
       part: row.part,
       caption: `${row.part} junct.`,
       level: "past",
-      is: `${row.applied.toFixed(1)} °C`,
+      is: formatFixed(row.applied, "°C", 1),
       ...(was !== null && { was }),
     },
   ];

@@ -1,6 +1,6 @@
 "use client";
 
-import { formatQuantity } from "../../lib/values/format-quantity";
+import { formatFixed, formatQuantity } from "../../lib/values/format-quantity";
 import type { Selection } from "../sheet/selection";
 import { marginNumber } from "../wording/numbers";
 import { quantityName, quantityUnit } from "../wording/quantities";
@@ -110,7 +110,11 @@ function appliedWords(line: StressLine): string {
     return `Not evaluated: needs ${(row.needs ?? ["more data"]).join(", ")}. Add it to ${row.part}, or have it waived.`;
   }
   const number = (value: number | null): string =>
-    value === null ? "?" : unit === "°C" ? `${value.toFixed(1)} °C` : formatQuantity(value, unit);
+    value === null
+      ? "?"
+      : unit === "°C"
+        ? formatFixed(value, "°C", 1)
+        : formatQuantity(value, unit);
   const rated = row.rated === null ? "" : ` (${number(row.rated)} rated)`;
   return `${number(row.applied)} of ${number(row.limit)} allowed${rated}, ${row.condition}`;
 }

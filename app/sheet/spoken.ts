@@ -14,7 +14,7 @@ const SAID: Readonly<Record<string, string>> = {
 };
 
 /** A kind in words: `relay coil`. */
-export function kindWords(kind: string): string {
+function kindWords(kind: string): string {
   if (!Object.hasOwn(catalogue, kind) && kind !== "block") return "part of unknown kind";
   return SAID[kind] ?? kind.replace(/[A-Z]/g, (letter) => ` ${letter.toLowerCase()}`);
 }

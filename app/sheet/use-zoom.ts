@@ -8,12 +8,12 @@ export interface View {
   readonly scale: number;
 }
 
-export const WHOLE: View = { at: [0, 0], scale: 1 };
+const WHOLE: View = { at: [0, 0], scale: 1 };
 const MOST = 8;
 const STEP = 1.25;
 
 /** Enlarged about a place that stays where it is; never smaller than the whole sheet, never beyond its edges. */
-export function zoomed(view: View, factor: number, about: Point, size: Point): View {
+function zoomed(view: View, factor: number, about: Point, size: Point): View {
   const scale = Math.min(MOST, Math.max(1, view.scale * factor));
   const ratio = view.scale / scale;
   return held(
@@ -25,7 +25,7 @@ export function zoomed(view: View, factor: number, about: Point, size: Point): V
   );
 }
 
-export function panned(view: View, by: Point, size: Point): View {
+function panned(view: View, by: Point, size: Point): View {
   return held({ ...view, at: [view.at[0] + by[0], view.at[1] + by[1]] }, size);
 }
 

@@ -6,7 +6,7 @@ import { objectOf, textOf } from "./plain";
 import { nextFree } from "./project-parts";
 import { CIRCUIT_TYPES, entriesOf, freshId, topLevel } from "./shape";
 
-/** The origin of a person's own edits: undo reaches these and nobody else's. */
+/** The origin of a person's own edits: undo reaches these and nobody else's. @internal to this layer and its tests */
 export const OWN_EDIT = "own edit";
 
 export type Place = readonly [x: number, y: number];

@@ -11,7 +11,7 @@ const MOST_STEPS = 5;
  * Hager's and Higham's method on diag(|A| |x|) A^-T. Unlike the 1-norm condition it does not depend
  * on the scaling of rows, so amperes beside volts do not alarm it.
  */
-export function skeelCondition(matrix: SparseMatrix, factor: Factor, x: Float64Array): number {
+function skeelCondition(matrix: SparseMatrix, factor: Factor, x: Float64Array): number {
   const { n } = matrix.pattern;
   const largest = x.reduce((most, value) => Math.max(most, Math.abs(value)), 0);
   if (n === 0 || largest === 0) return 1;

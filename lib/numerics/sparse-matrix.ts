@@ -49,19 +49,6 @@ export function patternOfEntries(
   return { pattern: { n, columnStart, rowIndex: rowIndex.slice(0, used) }, slot };
 }
 
-/** y = A x */
-export function multiply(matrix: SparseMatrix, x: Float64Array, y: Float64Array): void {
-  const { n, columnStart, rowIndex } = matrix.pattern;
-  y.fill(0);
-  for (let column = 0; column < n; column++) {
-    const factor = x[column] ?? 0;
-    for (let p = columnStart[column] ?? 0; p < (columnStart[column + 1] ?? 0); p++) {
-      const row = rowIndex[p] ?? 0;
-      y[row] = (y[row] ?? 0) + (matrix.values[p] ?? 0) * factor;
-    }
-  }
-}
-
 function identity(count: number): Int32Array {
   return Int32Array.from({ length: count }, (_, index) => index);
 }

@@ -94,7 +94,7 @@ function boundNow(record: CheckableRecord): BoundDigests {
 }
 
 /** The policy as the circuit file chooses it; null where it leaves the default. */
-export function policyOf(circuit: unknown): unknown {
+function policyOf(circuit: unknown): unknown {
   return typeof circuit === "object" && circuit !== null && "policy" in circuit
     ? circuit.policy
     : null;

@@ -1,5 +1,5 @@
 import type { CircuitResult, StressRow } from "../stress/circuit-result";
-import type { Verdict } from "../values/verdict";
+import { type Verdict, worst } from "../values/verdict";
 import { changedItems } from "./changed-items";
 import { latestChecks } from "./checks";
 import type { CriterionId, ExitCriterion } from "./exit-criterion";
@@ -49,11 +49,9 @@ const NOT_SOLVED = ["waits for the solver's results"];
 /** Puts judged things together; nothing judged is unknown. */
 function criterion(id: CriterionId, judged: readonly Judged[], whenNothing: string): ExitCriterion {
   const open = judged.filter((one) => one.verdict !== "pass" && one.waiver === null);
-  const failed = open.some((one) => one.verdict === "fail");
-  const unknown = judged.length === 0 || open.length > 0;
   return {
     id,
-    verdict: failed ? "fail" : unknown ? "unknown" : "pass",
+    verdict: worst(judged.map((one) => (one.waiver === null ? one.verdict : "pass"))),
     met: judged.length - open.length,
     of: judged.length,
     open: judged.length === 0 ? [whenNothing] : open.map((one) => one.words),

@@ -1,7 +1,5 @@
 import type { Decision, Finding, Role } from "./review-state";
 
-export type FindingState = "open" | "closed";
-
 export type Closure = Extract<Decision, { kind: "closure" }>;
 
 /** The closure that stands on each closed finding, by the finding's id. */

@@ -157,7 +157,7 @@ export function runOf(address: string) {
   return database().solverRun.findUnique({ where: { address } });
 }
 
-export async function decisionsOf(design: string): Promise<readonly Decision[]> {
+async function decisionsOf(design: string): Promise<readonly Decision[]> {
   const rows = await database().decision.findMany({
     where: { designId: design },
     orderBy: { seq: "asc" },

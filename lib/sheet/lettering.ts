@@ -2,7 +2,7 @@ import type { Box } from "../kinds/part-symbol";
 import type { Lettering, LetterStyle } from "./sheet-drawing";
 
 /** Size in sheet units, and whether it is set in the narrow or the even-width face. */
-export const LETTER_SIZES: Readonly<Record<LetterStyle, { size: number; even: boolean }>> = {
+const LETTER_SIZES: Readonly<Record<LetterStyle, { size: number; even: boolean }>> = {
   ref: { size: 11, even: false },
   value: { size: 11, even: false },
   net: { size: 10.5, even: false },

@@ -24,13 +24,13 @@ export interface PlacedSymbol {
 }
 
 /** A point of a symbol on the sheet: mirrored about the vertical, turned clockwise, moved. */
-export function onSheet([x, y]: Point, { at, turn, mirror }: Placing): Point {
+function onSheet([x, y]: Point, { at, turn, mirror }: Placing): Point {
   const [across, down] = turned([mirror ? -x : x, y], turn);
   return [at[0] + across, at[1] + down];
 }
 
 /** Quarter turns clockwise, y pointing down. No negative zero comes out. */
-export function turned([x, y]: Point, turn: 0 | 1 | 2 | 3): Point {
+function turned([x, y]: Point, turn: 0 | 1 | 2 | 3): Point {
   const turns: readonly Point[] = [
     [x, y],
     [0 - y, x],

@@ -121,7 +121,7 @@ function onGrid(value: number): number {
 }
 
 /** Without points that repeat or that lie within a straight run. */
-export function tidied(points: readonly Point[]): readonly Point[] {
+function tidied(points: readonly Point[]): readonly Point[] {
   const path: Point[] = [];
   for (const point of points) {
     const last = path.at(-1);

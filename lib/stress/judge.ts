@@ -23,7 +23,7 @@ export function judge(circuit: Circuit, options: JudgeOptions = {}): CircuitResu
 }
 
 /** Judges a circuit that is solved already. */
-export function judgeSolved(
+function judgeSolved(
   circuit: Circuit,
   solved: SolvedCircuit,
   options: JudgeOptions = {},

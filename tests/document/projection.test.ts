@@ -57,7 +57,7 @@ it("gives a circuit file back with every net, part and value", () => {
   expect(problems).toEqual([]);
   const [was, is] = [circuitOf(divider), circuitOf(file)];
   expect(is.nets).toEqual(was.nets);
-  expect(is.parts.map(({ ref }) => ref).sort()).toEqual(was.parts.map(({ ref }) => ref).sort());
+  expect(is.parts.map(({ path }) => path).sort()).toEqual(was.parts.map(({ path }) => path).sort());
 });
 
 it("gives the same bytes for the same state, whatever the order of merging", () => {
