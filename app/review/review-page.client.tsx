@@ -67,10 +67,9 @@ export function ReviewPage(props: { readonly view: ReviewView; readonly actions:
     solved: result?.conditions.find((one) => one.name === name)?.status === "solved",
     margins: result === null ? [] : conditionMargins(result, name, standing.isWaived),
   }));
-  const selectedNet =
-    selection !== null && "net" in selection
-      ? (rows.find((row) => row.net === selection.net) ?? null)
-      : null;
+  // Before anything is chosen the strip tells of the loudest net.
+  const wantedNet = selection !== null && "net" in selection ? selection.net : rows[0]?.net;
+  const selectedNet = rows.find((row) => row.net === wantedNet) ?? null;
 
   return (
     <>

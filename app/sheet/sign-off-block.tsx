@@ -50,12 +50,9 @@ function SignedOn({ line, right, y, onSign }: SignedOnProps) {
   if (line.signedOn !== null) {
     return (
       <>
-        <path
-          className="yes"
-          d={`M${right - 84} ${y + 9}l3 3.6l5.4 -7.6`}
-          role="img"
-          aria-label="signed"
-        />
+        <path className="yes" d={`M${right - 84} ${y + 9}l3 3.6l5.4 -7.6`}>
+          <title>signed</title>
+        </path>
         <CellText look="tm" x={right - 6} y={y + 26} room={70} anchor="end">
           {line.signedOn}
         </CellText>
