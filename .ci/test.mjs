@@ -2,6 +2,7 @@
 // stop the next ones; the last line counts them all. SEED=… npm test repeats a run's random cases.
 import { spawnSync } from "node:child_process";
 import { existsSync, mkdirSync, readFileSync, rmSync } from "node:fs";
+import { join } from "node:path";
 import { isInstalled } from "../lib/server/installed.mjs";
 
 const ROOT = new URL("..", import.meta.url).pathname;
@@ -68,7 +69,8 @@ async function browserTests() {
       "--config=.ci/playwright.config.ts",
     )({
       AMPERSIGN_CHROMIUM: chromium,
-      PLAYWRIGHT_JSON_OUTPUT_NAME: BROWSER_REPORT,
+      // Whole: the reporter reads a relative name from the folder of its configuration.
+      PLAYWRIGHT_JSON_OUTPUT_NAME: join(ROOT, BROWSER_REPORT),
       PLAYWRIGHT_SKIP_BROWSER_DOWNLOAD: "1",
     });
   return counted(work, BROWSER_REPORT, ({ stats }) => ({
