@@ -12,7 +12,18 @@ export default async function RegisterPage() {
   const view = await registerView(member);
   return (
     <>
-      <Mast title={view.workspace} subtitle="Drawing register" cells={<SignedIn me={view.me} />} />
+      <Mast
+        title={view.workspace}
+        subtitle="Drawing register"
+        cells={<SignedIn me={view.me} />}
+        actions={
+          view.me.roles.includes("designer") && (
+            <a className="btn main" href="/designs/new">
+              New design
+            </a>
+          )
+        }
+      />
       <Register view={view} />
     </>
   );

@@ -8,7 +8,7 @@ import { factor } from "../../lib/numerics/factor";
 import { refactor } from "../../lib/numerics/refactor";
 import { solve } from "../../lib/numerics/solve";
 import type { SparseMatrix } from "../../lib/numerics/sparse-matrix";
-import { interleaved } from "./median";
+import { interleaved } from "./interleaved";
 
 const ROUNDS = 200;
 

@@ -1,5 +1,5 @@
 /** The middle one of the given times. */
-export function median(times: readonly number[]): number {
+function median(times: readonly number[]): number {
   const sorted = times.toSorted((a, b) => a - b);
   return sorted[Math.floor(sorted.length / 2)] ?? Number.NaN;
 }
