@@ -9,6 +9,10 @@ export interface ReviewActions {
   readonly reopen: (finding: string, reason: string) => Promise<Deed>;
   readonly waive: (subject: WaiverSubject, margin: number | null, reason: string) => Promise<Deed>;
   readonly withdraw: (waiver: string, reason: string) => Promise<Deed>;
-  readonly sign: (meaning: Meaning, password: string) => Promise<Deed>;
+  readonly sign: (
+    meaning: Meaning,
+    password: string,
+    seen: Readonly<Record<string, string | null>>,
+  ) => Promise<Deed>;
   readonly giveBack: (reason: string) => Promise<Deed>;
 }

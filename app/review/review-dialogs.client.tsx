@@ -1,7 +1,8 @@
 "use client";
 
+import { boundDigests } from "../../lib/record/bound-digest";
 import { limitMargin, limitSubject } from "../../lib/review/limit-words";
-import type { Was } from "../../lib/review/review-state";
+import type { Decision, Finding, Was } from "../../lib/review/review-state";
 import type { ReviewView } from "../../lib/review/views";
 import type { LimitRow, StressRow } from "../../lib/stress/circuit-result";
 import { Dialog } from "../dialog/dialog.client";
@@ -132,7 +133,13 @@ export function ReviewDialogs(props: {
           revision={letter}
           meaning={asked.meaning}
           digest={view.proposed.digest}
-          onSign={(password) => actions.sign(asked.meaning, password)}
+          onSign={(password) =>
+            actions.sign(
+              asked.meaning,
+              password,
+              boundNow(view, session.findings, session.decisions),
+            )
+          }
           onClose={onClose}
         />
       );
@@ -159,6 +166,23 @@ export function ReviewDialogs(props: {
         </Dialog>
       );
   }
+}
+
+/** The digests of what the person sees now: findings and decisions as they have come to this page. */
+function boundNow(
+  view: ReviewView,
+  findings: readonly Finding[],
+  decisions: readonly Decision[],
+): Readonly<Record<string, string | null>> {
+  const live = boundDigests({
+    circuit: view.proposed.digest,
+    base: view.base?.digest ?? null,
+    results: "",
+    policy: null,
+    findings,
+    decisions,
+  });
+  return { ...view.bound, findings: live.findings, decisions: live.decisions };
 }
 
 /** The number a finding at this place would be about. */

@@ -3,9 +3,12 @@
  * not in git; migrations are written by `npx tsx .ci/new-migration.ts NAME`; a test gets a database of its own from `tests/fresh-database.ts`.
  */
 import { PrismaPg } from "@prisma/adapter-pg";
-import { PrismaClient } from "./generated/client";
+import { type Prisma, PrismaClient } from "./generated/client";
 
 export type { PrismaClient } from "./generated/client";
+
+/** A client within a transaction: reads and writes together or not at all. */
+export type TransactionClient = Prisma.TransactionClient;
 
 declare global {
   // Next loads a module several times over; the connections have to stay the same.

@@ -1,5 +1,5 @@
 import { Client } from "pg";
-import type { PrismaClient } from "./client";
+import type { PrismaClient, TransactionClient } from "./client";
 
 /** The channel on which a stored change's number is told: `DESIGN SEQ`. */
 export const DOCUMENT_CHANNEL = "document";
@@ -7,6 +7,31 @@ export const DOCUMENT_CHANNEL = "document";
 interface StoredUpdate {
   readonly seq: number;
   readonly bytes: Uint8Array;
+}
+
+/** A snapshot, if there is one, and the changes that it does not hold. */
+interface StoredDocument {
+  readonly snapshot: Uint8Array | null;
+  readonly updates: readonly StoredUpdate[];
+}
+
+/** Reads a document, in one view: rows that a snapshot takes the place of are gone when the snapshot is there. */
+export async function loadDocument(
+  client: TransactionClient,
+  designId: string,
+): Promise<StoredDocument | null> {
+  const design = await client.design.findUnique({
+    where: { id: designId },
+    select: {
+      snapshot: { select: { bytes: true } },
+      updates: { orderBy: { seq: "asc" }, select: { seq: true, bytes: true } },
+    },
+  });
+  if (design === null) return null;
+  return {
+    snapshot: design.snapshot === null ? null : new Uint8Array(design.snapshot.bytes),
+    updates: design.updates.map(stored),
+  };
 }
 
 /**
@@ -21,23 +46,8 @@ export class PostgresDocumentStore {
   ) {}
 
   /** The stored document; null: there is no such design. */
-  async load(designId: string): Promise<{
-    readonly snapshot: Uint8Array | null;
-    readonly updates: readonly StoredUpdate[];
-  } | null> {
-    // One statement's view: rows that a snapshot takes the place of are gone when the snapshot is there.
-    const design = await this.client.design.findUnique({
-      where: { id: designId },
-      select: {
-        snapshot: { select: { bytes: true } },
-        updates: { orderBy: { seq: "asc" }, select: { seq: true, bytes: true } },
-      },
-    });
-    if (design === null) return null;
-    return {
-      snapshot: design.snapshot === null ? null : new Uint8Array(design.snapshot.bytes),
-      updates: design.updates.map(stored),
-    };
+  load(designId: string): Promise<StoredDocument | null> {
+    return loadDocument(this.client, designId);
   }
 
   /** Stores changes in one statement and tells every process; resolves after the commit, with their numbers in order. */
@@ -72,16 +82,29 @@ export class PostgresDocumentStore {
   /** Puts a snapshot in the place of the changes that it holds. */
   async snapshot(designId: string, bytes: Uint8Array, held: readonly number[]): Promise<void> {
     const data = { bytes: new Uint8Array(bytes), at: new Date() };
-    await this.client.$transaction([
-      this.client.documentSnapshot.upsert({
+    await this.client.$transaction(async (transaction) => {
+      const rows = { designId, seq: { in: held.map(BigInt) } };
+      const writers = await transaction.documentUpdate.groupBy({
+        by: ["author"],
+        where: { ...rows, author: { not: null } },
+        _max: { at: true },
+      });
+      for (const { author, _max } of writers) {
+        if (author === null) continue;
+        const lastAt = _max.at ?? data.at;
+        await transaction.draftEditor.upsert({
+          where: { designId_userId: { designId, userId: author } },
+          create: { designId, userId: author, lastAt },
+          update: { lastAt },
+        });
+      }
+      await transaction.documentSnapshot.upsert({
         where: { designId },
         create: { designId, ...data },
         update: data,
-      }),
-      this.client.documentUpdate.deleteMany({
-        where: { designId, seq: { in: held.map(BigInt) } },
-      }),
-    ]);
+      });
+      await transaction.documentUpdate.deleteMany({ where: rows });
+    });
   }
 
   /** Whether the user is, or hereby becomes, the owner of a client id: its first user owns it. */

@@ -1,4 +1,4 @@
-import type { PrismaClient } from "./client";
+import type { TransactionClient } from "./client";
 
 /** What a worker needs to compute a run. */
 export interface ClaimedRun {
@@ -16,7 +16,7 @@ const MOST_ATTEMPTS = 5;
 
 /** The runs in Postgres. Every change of state is conditional on the lease in the run's own row. */
 export class SolverRuns {
-  constructor(private readonly client: PrismaClient) {}
+  constructor(private readonly client: TransactionClient) {}
 
   /** Asks for a run; one of the same address, done or not, is left as it is. @returns whether it is new */
   async request(run: {

@@ -1,15 +1,13 @@
-import { database } from "../database/client";
+import { database, type TransactionClient } from "../database/client";
 import { DOCUMENT_CHANNEL } from "../database/document-store";
 import type { Prisma } from "../database/generated/client";
 import { decisionUpdate } from "../document/decision-update";
 import { auditHash, FIRST_PREVIOUS_HASH } from "../record/audit-chain";
 import type { Decision } from "../review/review-state";
 
-type Transaction = Prisma.TransactionClient;
-
 /** Appends an entry to a workspace's audit chain; the workspace's row is locked, so that entries come one by one. */
 export async function appendAudit(
-  transaction: Transaction,
+  transaction: TransactionClient,
   workspace: string,
   entry: {
     readonly at: string;
@@ -19,7 +17,7 @@ export async function appendAudit(
     readonly payload: unknown;
   },
 ): Promise<void> {
-  await transaction.$queryRaw`select id from "Workspace" where id = ${workspace} for update`;
+  await transaction.$queryRaw`select id from "Workspace" where id = ${workspace} for no key update`;
   const last = await transaction.auditEntry.findFirst({
     where: { workspaceId: workspace },
     orderBy: { seq: "desc" },
@@ -43,7 +41,7 @@ export async function appendAudit(
 
 /** Stores a decision, its audit entry and its mirror in the shared document, together or not at all. */
 export async function storeDecision(
-  transaction: Transaction,
+  transaction: TransactionClient,
   workspace: string,
   design: string,
   decision: Decision,
@@ -68,7 +66,9 @@ export async function storeDecision(
 }
 
 /** Runs a change of the database as one transaction. */
-export function inTransaction<T>(change: (transaction: Transaction) => Promise<T>): Promise<T> {
+export function inTransaction<T>(
+  change: (transaction: TransactionClient) => Promise<T>,
+): Promise<T> {
   return database().$transaction(change, { timeout: 20_000 });
 }
 

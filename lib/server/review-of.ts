@@ -1,7 +1,7 @@
 import type { CircuitFile } from "../circuit/circuit-file";
 import { digest } from "../circuit/digest";
 import type { Comparison } from "../comparison/comparison";
-import { database } from "../database/client";
+import { database, type TransactionClient } from "../database/client";
 import { readFindings } from "../document/findings";
 import { type BoundDigests, boundDigest, boundDigests } from "../record/bound-digest";
 import { exitCriteria } from "../review/exit-criteria";
@@ -52,21 +52,21 @@ export async function reviewOf(
   member: ActingMember,
   number: string,
   letter: string,
+  client: TransactionClient = database(),
 ): Promise<Result<ReviewOf, NotFound>> {
-  const design = await designOf(member, number);
+  const design = await designOf(member, number, client);
   if (!design.ok) return design;
-  const revisions = await revisionsOf(design.value.id);
+  const revisions = await revisionsOf(design.value.id, client);
   const revision = revisions.find((one) => one.letter === letter);
   if (revision === undefined) return fail({ kind: "notFound" });
   const base = revisions.find((one) => one.letter === revision.baseLetter) ?? null;
-  const [run, comparisonRun, baseRun, allDecisions, people, allFindings] = await Promise.all([
-    runOf(revision.runAddress),
-    runOf(revision.comparisonAddress),
-    base === null ? null : runOf(base.runAddress),
-    decisionsOf(design.value.id),
-    peopleOf(member.workspace),
-    findingsOf(design.value.id),
-  ]);
+  // One after the other: within a transaction there is one line to the database.
+  const run = await runOf(revision.runAddress, client);
+  const comparisonRun = await runOf(revision.comparisonAddress, client);
+  const baseRun = base === null ? null : await runOf(base.runAddress, client);
+  const allDecisions = await decisionsOf(design.value.id, client);
+  const people = await peopleOf(member.workspace, client);
+  const allFindings = await findingsOf(design.value.id, client);
   const { decisions, findings } = asReleased(revision.releasedAt, allDecisions, allFindings);
   const result = run?.result == null ? null : storedResult(run.result);
   const comparison = comparisonRun?.result == null ? null : storedComparison(comparisonRun.result);
@@ -146,19 +146,22 @@ export function standingSignatures(review: ReviewOf): readonly Signature[] {
   );
 }
 
-export function revisionsOf(design: string) {
-  return database().revision.findMany({
+export function revisionsOf(design: string, client: TransactionClient = database()) {
+  return client.revision.findMany({
     where: { designId: design },
     orderBy: [{ frozenAt: "asc" }, { letter: "asc" }],
   });
 }
 
-export function runOf(address: string) {
-  return database().solverRun.findUnique({ where: { address } });
+export function runOf(address: string, client: TransactionClient = database()) {
+  return client.solverRun.findUnique({ where: { address } });
 }
 
-async function decisionsOf(design: string): Promise<readonly Decision[]> {
-  const rows = await database().decision.findMany({
+async function decisionsOf(
+  design: string,
+  client: TransactionClient,
+): Promise<readonly Decision[]> {
+  const rows = await client.decision.findMany({
     where: { designId: design },
     orderBy: { seq: "asc" },
     select: { payload: true },
@@ -166,8 +169,11 @@ async function decisionsOf(design: string): Promise<readonly Decision[]> {
   return rows.map((row) => storedDecision(row.payload));
 }
 
-export async function peopleOf(workspace: string): Promise<readonly WorkspacePerson[]> {
-  const members = await database().member.findMany({
+export async function peopleOf(
+  workspace: string,
+  client: TransactionClient = database(),
+): Promise<readonly WorkspacePerson[]> {
+  const members = await client.member.findMany({
     where: { workspaceId: workspace },
     include: { user: { select: { name: true } } },
     orderBy: { userId: "asc" },
@@ -179,8 +185,8 @@ export async function peopleOf(workspace: string): Promise<readonly WorkspacePer
   }));
 }
 
-async function findingsOf(design: string): Promise<readonly Finding[]> {
-  const doc = await storedDocument(design);
+async function findingsOf(design: string, client: TransactionClient): Promise<readonly Finding[]> {
+  const doc = await storedDocument(design, client);
   if (doc === null) return [];
   const findings = readFindings(doc);
   doc.destroy();

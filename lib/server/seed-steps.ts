@@ -126,6 +126,7 @@ export async function signAll(
 ): Promise<void> {
   for (const [name, meaning, at] of signatures) {
     const { member, prove } = person(story, name);
-    told(await signRevision(member, { number, letter, at }, meaning, await prove()));
+    const { bound } = told(await reviewOf(member, number, letter));
+    told(await signRevision(member, { number, letter, at }, meaning, await prove(), { ...bound }));
   }
 }

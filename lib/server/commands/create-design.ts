@@ -36,6 +36,9 @@ export async function createDesign(
   const bytes = new Uint8Array(Y.encodeStateAsUpdate(doc));
   doc.destroy();
   return inTransaction(async (transaction) => {
+    // The workspace first, as the audit log does: two who make designs at once take turns.
+    await transaction.$queryRaw`
+      select id from "Workspace" where id = ${member.workspace} for no key update`;
     const where = { workspaceId: member.workspace, number: given.number };
     if ((await transaction.design.findUnique({ where: { workspaceId_number: where } })) !== null)
       return fail({ kind: "numberTaken", number: given.number });

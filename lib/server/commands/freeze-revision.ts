@@ -1,14 +1,19 @@
+import type { TransactionClient } from "../../database/client";
+import { SolverRuns } from "../../database/solver-runs";
 import { project } from "../../document/projection";
 import { compareAddress, solveAddress } from "../../jobs/run-address";
 import { readCircuitFile } from "../../kinds/read-circuit";
+import { engineVersion } from "../../mna/engine-version";
 import type { FileProblem } from "../../values/problem";
 import { fail, ok, type Result } from "../../values/result";
 import { nextRevisionLetter } from "../../values/revision-letter";
 import { appendAudit, inTransaction } from "../decide";
 import { storedDocument } from "../document-state";
-import { requestRun } from "../run-requests";
+import { draftEditors } from "../draft-editors";
+import { revisionsOf } from "../review-of";
+import { wakeWorkers } from "../run-requests";
 import type { ActingMember } from "../sign-in";
-import { designOf, type NotFound } from "./design-of";
+import { lockedDesignOf, type NotFound } from "./design-of";
 
 export type NotFrozen =
   | NotFound
@@ -32,36 +37,28 @@ export async function freezeRevision(
   if (!member.roles.includes("designer")) return fail({ kind: "notADesigner" });
   const changeNote = given.changeNote.trim();
   if (changeNote === "") return fail({ kind: "noChangeNote" });
-  const design = await designOf(member, given.number);
-  if (!design.ok) return design;
-  const draft = await draftOf(design.value.id);
-  if (!draft.ok) return draft;
-  const { circuit, text } = draft.value;
   const at = given.at ?? new Date().toISOString();
   const frozen = await inTransaction(async (transaction) => {
-    // Two who freeze at once take turns: the second sees the first one's letter.
-    await transaction.$queryRaw`select id from "Design" where id = ${design.value.id} for update`;
-    const revisions = await transaction.revision.findMany({
-      where: { designId: design.value.id },
-      orderBy: { frozenAt: "asc" },
-    });
+    // Two who freeze at once take turns: the second sees the first one's letter, and the draft as it is then.
+    const design = await lockedDesignOf(transaction, member, given.number);
+    if (!design.ok) return design;
+    const draft = await draftOf(transaction, design.value.id);
+    if (!draft.ok) return draft;
+    const { circuit, text } = draft.value;
+    const revisions = await revisionsOf(design.value.id, transaction);
     const last = revisions.at(-1) ?? null;
     if (last !== null && last.digest === circuit.digest && last.state !== "returned")
       return fail({ kind: "nothingNew" as const, letter: last.letter });
     const base = revisions.filter((one) => one.releasedAt !== null).at(-1) ?? null;
     const letter = nextRevisionLetter(last?.letter ?? null);
+    const editors = await draftEditors(transaction, design.value.id, last?.frozenAt ?? null);
     const revision = {
       designId: design.value.id,
       letter,
       circuit: text,
       digest: circuit.digest,
       changeNote,
-      authors: await authorsSince(
-        transaction,
-        design.value.id,
-        last?.frozenAt ?? null,
-        member.user,
-      ),
+      authors: [...new Set([member.user, ...editors])],
       frozenAt: new Date(at),
       baseLetter: base?.letter ?? null,
       state: "underReview",
@@ -69,6 +66,15 @@ export async function freezeRevision(
       comparisonAddress: compareAddress(circuit.digest, base?.digest ?? null),
     };
     await transaction.revision.create({ data: revision });
+    const runs = new SolverRuns(transaction);
+    const proposed = { proposed: text, engine: engineVersion };
+    await runs.request({ ...proposed, address: revision.runAddress, kind: "solve", base: null });
+    await runs.request({
+      ...proposed,
+      address: revision.comparisonAddress,
+      kind: "compare",
+      base: base?.circuit ?? null,
+    });
     await appendAudit(transaction, member.workspace, {
       at,
       actor: member.user,
@@ -76,17 +82,15 @@ export async function freezeRevision(
       subject: design.value.id,
       payload: { letter, digest: circuit.digest, changeNote, base: base?.letter ?? null },
     });
-    return ok({ letter, base: base?.circuit ?? null, revision });
+    return ok(revision);
   });
   if (!frozen.ok) return frozen;
-  const { letter, base, revision } = frozen.value;
-  await requestRun({ address: revision.runAddress, kind: "solve", proposed: text, base: null });
-  await requestRun({ address: revision.comparisonAddress, kind: "compare", proposed: text, base });
-  return ok(letter);
+  await wakeWorkers([frozen.value.runAddress, frozen.value.comparisonAddress]);
+  return ok(frozen.value.letter);
 }
 
-async function draftOf(design: string) {
-  const doc = await storedDocument(design);
+async function draftOf(transaction: TransactionClient, design: string) {
+  const doc = await storedDocument(design, transaction);
   if (doc === null) return fail({ kind: "notFound" as const });
   const { file, problems } = project(doc);
   doc.destroy();
@@ -98,28 +102,4 @@ async function draftOf(design: string) {
   const circuit = readCircuitFile(file);
   if (!circuit.ok) return fail({ kind: "draftHasProblems" as const, problems: circuit.error });
   return ok({ circuit: circuit.value, text: JSON.stringify(file) });
-}
-
-/** Whoever edited the circuit since the last freeze, and the one who freezes. */
-async function authorsSince(
-  transaction: Parameters<Parameters<typeof inTransaction>[0]>[0],
-  design: string,
-  since: Date | null,
-  freezer: string,
-): Promise<string[]> {
-  const members = await transaction.documentUpdate.findMany({
-    where: {
-      designId: design,
-      author: { not: null },
-      ...(since !== null && { at: { gt: since } }),
-    },
-    distinct: ["author"],
-    select: { author: true },
-  });
-  const editors = members.flatMap(({ author }) => (author === null ? [] : [author]));
-  const designers = await transaction.member.findMany({
-    where: { userId: { in: editors }, roles: { has: "designer" } },
-    select: { userId: true },
-  });
-  return [...new Set([freezer, ...designers.map(({ userId }) => userId)])];
 }

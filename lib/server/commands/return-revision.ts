@@ -2,8 +2,9 @@ import { randomUUID } from "node:crypto";
 import type { Decision } from "../../review/review-state";
 import { fail, ok, type Result } from "../../values/result";
 import { inTransaction, storeDecision } from "../decide";
-import { reviewOf } from "../review-of";
+import { type ReviewOf, reviewOf } from "../review-of";
 import type { ActingMember } from "../sign-in";
+import { lockedDesignOf } from "./design-of";
 import type { About, NotDecided } from "./review-decisions";
 
 /** Returns a revision to its authors: it stays as it is, and is no longer under review. */
@@ -12,28 +13,34 @@ export async function returnRevision(
   about: About,
   reason: string,
 ): Promise<Result<Decision, NotDecided>> {
-  const review = await reviewOf(member, about.number, about.letter);
-  if (!review.ok) return review;
-  if (review.value.revision.state !== "underReview") return fail({ kind: "notUnderReview" });
-  if (review.value.revision.authors.includes(member.user)) return fail({ kind: "authorOfIt" });
-  if (!member.roles.some((role) => role === "reviewer" || role === "approver"))
-    return fail({ kind: "noRight" });
-  if (reason.trim() === "") return fail({ kind: "noReason" });
-  const decision: Decision = {
-    id: randomUUID(),
-    kind: "return",
-    user: member.user,
-    at: about.at ?? new Date().toISOString(),
-    revision: about.letter,
-    reason: reason.trim(),
-  };
-  const design = review.value.design.id;
-  await inTransaction(async (transaction) => {
+  return inTransaction(async (transaction) => {
+    const design = await lockedDesignOf(transaction, member, about.number);
+    if (!design.ok) return design;
+    const review = await reviewOf(member, about.number, about.letter, transaction);
+    if (!review.ok) return review;
+    const refusal = mayNotReturn(member, review.value, reason);
+    if (refusal !== null) return fail(refusal);
+    const decision: Decision = {
+      id: randomUUID(),
+      kind: "return",
+      user: member.user,
+      at: about.at ?? new Date().toISOString(),
+      revision: about.letter,
+      reason: reason.trim(),
+    };
     await transaction.revision.update({
-      where: { designId_letter: { designId: design, letter: about.letter } },
+      where: { designId_letter: { designId: design.value.id, letter: about.letter } },
       data: { state: "returned" },
     });
-    await storeDecision(transaction, member.workspace, design, decision);
+    await storeDecision(transaction, member.workspace, design.value.id, decision);
+    return ok(decision);
   });
-  return ok(decision);
+}
+
+function mayNotReturn(member: ActingMember, review: ReviewOf, reason: string): NotDecided | null {
+  if (review.revision.state !== "underReview") return { kind: "notUnderReview" };
+  if (review.revision.authors.includes(member.user)) return { kind: "authorOfIt" };
+  if (!member.roles.some((role) => role === "reviewer" || role === "approver"))
+    return { kind: "noRight" };
+  return reason.trim() === "" ? { kind: "noReason" } : null;
 }

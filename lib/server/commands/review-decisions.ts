@@ -3,12 +3,12 @@ import { changedItems } from "../../review/changed-items";
 import { mayDecideFinding, standingClosures } from "../../review/finding-states";
 import { limitMargin, limitSubject } from "../../review/limit-words";
 import type { Decision, WaiverSubject } from "../../review/review-state";
-import { grantedWaivers } from "../../review/waivers";
+import { grantedWaivers, waiverOfLimit, waiverOfRow } from "../../review/waivers";
 import { fail, ok, type Result } from "../../values/result";
 import { inTransaction, storeDecision } from "../decide";
 import { type ReviewOf, reviewOf } from "../review-of";
 import type { ActingMember } from "../sign-in";
-import type { NotFound } from "./design-of";
+import { lockedDesignOf, type NotFound } from "./design-of";
 
 export type NotDecided =
   | NotFound
@@ -82,6 +82,7 @@ export async function grantWaiver(
     if (reason.trim() === "") return fail({ kind: "noReason" });
     const margin = waivableMargin(review, subject);
     if (margin === undefined) return fail({ kind: "nothingToWaive" });
+    if (isWaived(review, subject)) return fail({ kind: "alreadySo" });
     const granted = review.decisions.filter((decision) => decision.kind === "waiver").length;
     return ok({
       ...common,
@@ -128,6 +129,25 @@ function waivableMargin(review: ReviewOf, subject: WaiverSubject): number | null
   return row === undefined || row.verdict === "pass" ? undefined : row.margin;
 }
 
+/** Whether a waiver covers the subject at the number it has now. */
+function isWaived(review: ReviewOf, subject: WaiverSubject): boolean {
+  const waivers = grantedWaivers(review.decisions);
+  if ("limit" in subject)
+    return (review.result?.limits ?? []).some(
+      (row) =>
+        row.condition === subject.condition &&
+        limitSubject(row) === subject.limit &&
+        waiverOfLimit(row, waivers) !== null,
+    );
+  return (review.result?.stress ?? []).some(
+    (row) =>
+      row.part === subject.part &&
+      row.rule.id === subject.rule &&
+      row.condition === subject.condition &&
+      waiverOfRow(row, waivers) !== null,
+  );
+}
+
 function canWrite(member: ActingMember): boolean {
   return member.roles.some((role) => role !== "observer");
 }
@@ -143,18 +163,19 @@ async function decide(
   about: About,
   make: (review: ReviewOf, common: Common) => Result<Decision, NotDecided>,
 ): Decided {
-  const review = await reviewOf(member, about.number, about.letter);
-  if (!review.ok) return review;
-  if (review.value.revision.state !== "underReview") return fail({ kind: "notUnderReview" });
-  const common: Common = {
-    id: randomUUID(),
-    user: member.user,
-    at: about.at ?? new Date().toISOString(),
-  };
-  const decision = make(review.value, common);
-  if (!decision.ok) return decision;
-  await inTransaction((transaction) =>
-    storeDecision(transaction, member.workspace, review.value.design.id, decision.value),
-  );
-  return decision;
+  return inTransaction(async (transaction) => {
+    const design = await lockedDesignOf(transaction, member, about.number);
+    if (!design.ok) return design;
+    const review = await reviewOf(member, about.number, about.letter, transaction);
+    if (!review.ok) return review;
+    if (review.value.revision.state !== "underReview") return fail({ kind: "notUnderReview" });
+    const decision = make(review.value, {
+      id: randomUUID(),
+      user: member.user,
+      at: about.at ?? new Date().toISOString(),
+    });
+    if (!decision.ok) return decision;
+    await storeDecision(transaction, member.workspace, design.value.id, decision.value);
+    return decision;
+  });
 }

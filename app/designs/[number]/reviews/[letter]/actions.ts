@@ -31,6 +31,8 @@ const subject = z.union([
   z.object({ part: text, rule: text, condition: text }),
   z.object({ limit: text, condition: text }),
 ]);
+/** What the page showed: a signature given to something else is refused. */
+const digests = z.record(z.string(), z.string().nullable());
 const meaning = z.enum(["authored", "reviewed", "approved"]);
 
 type About = z.infer<typeof about>;
@@ -80,6 +82,7 @@ export async function signAction(
   given: About,
   signed: z.infer<typeof meaning>,
   password: string,
+  seen: z.infer<typeof digests>,
 ): Promise<Deed> {
   const where = about.parse(given);
   const wanted = meaning.parse(signed);
@@ -87,7 +90,13 @@ export async function signAction(
   if (!member.ok) return { done: false, message: signedOut };
   const proof = await provePassword(member.value, text.parse(password));
   if (!proof.ok) return { done: false, message: proofRefusal(proof.error) };
-  const signature = await signRevision(member.value, where, wanted, proof.value);
+  const signature = await signRevision(
+    member.value,
+    where,
+    wanted,
+    proof.value,
+    digests.parse(seen),
+  );
   return signature.ok ? { done: true } : { done: false, message: signingSentence(signature.error) };
 }
 
