@@ -16,6 +16,8 @@ const DECISIONS = {
   noSuchFinding: "This finding is not there. Reload the page.",
   alreadySo: "Somebody has done this already.",
   nothingToWaive: "There is nothing to waive: the number is inside its limit, or not known yet.",
+  changedMeanwhile:
+    "The number has changed since this page was shown. Reload the page, look at it, then waive.",
 } as const;
 
 export function decisionRefusal(failure: { readonly kind: keyof typeof DECISIONS }): string {

@@ -2,6 +2,9 @@ import * as Y from "yjs";
 import type { TransactionClient } from "../database/client";
 import { CIRCUIT_TYPES } from "../document/shape";
 
+/** A change that began before a freeze may be stored after it: longer than any transaction that stores one. */
+const STRADDLE_MS = 10_000;
+
 /**
  * Who edited the circuit of a draft since a moment (null: ever). Found by replaying the stored changes:
  * whoever only wrote findings is no author. Changes that a snapshot has swallowed are told by
@@ -12,13 +15,14 @@ export async function draftEditors(
   design: string,
   since: Date | null,
 ): Promise<ReadonlySet<string>> {
+  const from = since === null ? null : new Date(since.getTime() - STRADDLE_MS);
   const snapshot = await transaction.documentSnapshot.findUnique({ where: { designId: design } });
   const rows = await transaction.documentUpdate.findMany({
     where: { designId: design },
     orderBy: { seq: "asc" },
   });
   const folded = await transaction.draftEditor.findMany({
-    where: { designId: design, ...(since !== null && { lastAt: { gt: since } }) },
+    where: { designId: design, ...(from !== null && { lastAt: { gt: from } }) },
   });
   const editors = new Set(folded.map((editor) => editor.userId));
   const doc = new Y.Doc();
@@ -30,8 +34,7 @@ export async function draftEditors(
   for (const row of rows) {
     touched = false;
     Y.applyUpdate(doc, new Uint8Array(row.bytes));
-    if (touched && row.author !== null && (since === null || row.at > since))
-      editors.add(row.author);
+    if (touched && row.author !== null && (from === null || row.at > from)) editors.add(row.author);
   }
   doc.destroy();
   return editors;

@@ -6,10 +6,11 @@ import { SolverRuns } from "../database/solver-runs";
 import { entriesOf, topLevel } from "../document/shape";
 import { RunComputer } from "../jobs/run-one";
 import { changedItems } from "../review/changed-items";
+import type { WaiverSubject } from "../review/review-state";
 import type { Result } from "../values/result";
 import { createDesign } from "./commands/create-design";
 import { freezeRevision } from "./commands/freeze-revision";
-import { checkItem } from "./commands/review-decisions";
+import { type About, checkItem, grantWaiver, waivableMargin } from "./commands/review-decisions";
 import { signRevision } from "./commands/sign-revision";
 import { storedDocument } from "./document-state";
 import { reviewOf } from "./review-of";
@@ -111,6 +112,19 @@ export async function checkOff(
   const { comparison } = told(await reviewOf(member, number, letter));
   const items = comparison === null ? [] : changedItems(comparison).slice(0, most);
   for (const item of items) told(await checkItem(member, { number, letter, at }, item.id, true));
+}
+
+/** Waives a number as it is shown. */
+export async function waive(
+  story: Story,
+  approver: string,
+  about: About,
+  subject: WaiverSubject,
+  reason: string,
+): Promise<void> {
+  const { member } = person(story, approver);
+  const shown = waivableMargin(told(await reviewOf(member, about.number, about.letter)), subject);
+  told(await grantWaiver(member, about, subject, shown ?? null, reason));
 }
 
 /** Signs with the own password, one after another. */

@@ -1,20 +1,9 @@
 /** Fills an empty database with the demo: a story told through the same commands that people use. Ends at once where there is data. */
 import { database } from "../database/client";
 import { removePart, setParameter } from "../document/edits";
-import { grantWaiver } from "./commands/review-decisions";
 import { seedPeople } from "./seed-members";
 import { seedOthers } from "./seed-others";
-import {
-  checkOff,
-  draw,
-  edit,
-  freeze,
-  openStory,
-  person,
-  type Story,
-  signAll,
-  told,
-} from "./seed-steps";
+import { checkOff, draw, edit, freeze, openStory, type Story, signAll, waive } from "./seed-steps";
 
 const FAN = "FFC-2";
 
@@ -35,13 +24,12 @@ async function fanController(story: Story): Promise<void> {
     at: "2026-09-01T08:00:00.000Z",
   });
   await freeze(story, "Mara", FAN, "First issue", "2026-09-03T09:10:00.000Z");
-  told(
-    await grantWaiver(
-      person(story, "Tove").member,
-      { number: FAN, letter: "A", at: "2026-09-04T07:30:00.000Z" },
-      { part: "K1", rule: "cp-relay-coil", condition: "Cold crank" },
-      "The fan need not start while the engine cranks; the coil has its full voltage again within two seconds.",
-    ),
+  await waive(
+    story,
+    "Tove",
+    { number: FAN, letter: "A", at: "2026-09-04T07:30:00.000Z" },
+    { part: "K1", rule: "cp-relay-coil", condition: "Cold crank" },
+    "The fan need not start while the engine cranks; the coil has its full voltage again within two seconds.",
   );
   await checkOff(story, "Idris", FAN, "A", "2026-09-04T12:00:00.000Z");
   await signAll(story, FAN, "A", [

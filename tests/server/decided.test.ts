@@ -50,7 +50,7 @@ describe("what is decided", () => {
       freezeRevision(shop.outsider, { number: FAN, changeNote: "mine now" }),
       checkItem(shop.outsider, about, "R7.resistance", true),
       decideFinding(shop.outsider, about, "any", "closure", "why"),
-      grantWaiver(shop.outsider, about, COIL, "why"),
+      grantWaiver(shop.outsider, about, COIL, null, "why"),
       withdrawWaiver(shop.outsider, about, "W-1", "why"),
       returnRevision(shop.outsider, about, "why"),
       signRevision(shop.outsider, about, "approved", proof, {}),

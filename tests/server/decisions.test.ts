@@ -44,11 +44,14 @@ describe("decisions about a revision", () => {
       expect(await shop.sign(shop.approver, "A", "approved")).toMatchObject({
         error: { kind: "criteriaOpen" },
       });
-      expect(await grantWaiver(shop.reviewer, about, COIL, "because")).toMatchObject({
+      expect(await grantWaiver(shop.reviewer, about, COIL, null, "because")).toMatchObject({
         error: { kind: "noRight" },
       });
-      good(await grantWaiver(shop.approver, about, COIL, "The fan need not start while cranking."));
-      expect(await grantWaiver(shop.approver, about, COIL, "again")).toMatchObject({
+      expect(await grantWaiver(shop.approver, about, COIL, 0, "unseen")).toMatchObject({
+        error: { kind: "changedMeanwhile" },
+      });
+      good(await shop.waive(COIL, "A", "The fan need not start while cranking."));
+      expect(await shop.waive(COIL, "A", "again")).toMatchObject({
         error: { kind: "alreadySo" },
       });
       // The waiver is a decision that the review did not know of: it has to be signed again.
@@ -122,6 +125,16 @@ describe("decisions about a revision", () => {
       },
     );
     expect(signed).toMatchObject({ error: { kind: "changedMeanwhile", what: ["findings"] } });
+    const unseen = await signRevision(
+      shop.designer,
+      { number: FAN, letter: "C" },
+      "authored",
+      proof,
+      {},
+    );
+    expect(unseen).toMatchObject({
+      error: { kind: "changedMeanwhile", what: Object.keys(bound) },
+    });
   });
 
   it("take turns: of two who freeze, return or close at once, one does", async () => {

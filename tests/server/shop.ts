@@ -10,7 +10,7 @@ import type { Role } from "../../lib/review/review-state";
 import { addPerson } from "../../lib/server/auth";
 import { createDesign } from "../../lib/server/commands/create-design";
 import { freezeRevision } from "../../lib/server/commands/freeze-revision";
-import { checkItem } from "../../lib/server/commands/review-decisions";
+import { checkItem, grantWaiver, waivableMargin } from "../../lib/server/commands/review-decisions";
 import { signRevision } from "../../lib/server/commands/sign-revision";
 import { storedDocument } from "../../lib/server/document-state";
 import { reviewOf } from "../../lib/server/review-of";
@@ -110,6 +110,12 @@ export class Shop {
     const { comparison } = good(await reviewOf(by, FAN, letter));
     for (const { id } of comparison === null ? [] : changedItems(comparison))
       good(await checkItem(by, { number: FAN, letter }, id, true));
+  }
+
+  /** Waives a number as it is shown. */
+  async waive(subject: typeof COIL, letter: string, reason: string) {
+    const shown = waivableMargin(good(await reviewOf(this.approver, FAN, letter)), subject);
+    return grantWaiver(this.approver, { number: FAN, letter }, subject, shown ?? null, reason);
   }
 
   async sign(by: ActingMember, letter: string, meaning: Meaning) {

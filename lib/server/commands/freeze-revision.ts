@@ -51,14 +51,17 @@ export async function freezeRevision(
       return fail({ kind: "nothingNew" as const, letter: last.letter });
     const base = revisions.filter((one) => one.releasedAt !== null).at(-1) ?? null;
     const letter = nextRevisionLetter(last?.letter ?? null);
-    const editors = await draftEditors(transaction, design.value.id, last?.frozenAt ?? null);
+    // Everything since the base is under review, what a returned revision brought too.
+    const editors = await draftEditors(transaction, design.value.id, base?.frozenAt ?? null);
+    const between = revisions.slice(base === null ? 0 : revisions.indexOf(base) + 1);
+    const earlier = between.flatMap((one) => one.authors);
     const revision = {
       designId: design.value.id,
       letter,
       circuit: text,
       digest: circuit.digest,
       changeNote,
-      authors: [...new Set([member.user, ...editors])],
+      authors: [...new Set([member.user, ...editors, ...earlier])],
       frozenAt: new Date(at),
       baseLetter: base?.letter ?? null,
       state: "underReview",

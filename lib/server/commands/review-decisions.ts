@@ -20,7 +20,9 @@ export type NotDecided =
   | { readonly kind: "noSuchItem" }
   | { readonly kind: "noSuchFinding" }
   | { readonly kind: "alreadySo" }
-  | { readonly kind: "nothingToWaive" };
+  | { readonly kind: "nothingToWaive" }
+  /** The number to be waived is not the one that the person saw. */
+  | { readonly kind: "changedMeanwhile" };
 
 type Decided = Promise<Result<Decision, NotDecided>>;
 
@@ -69,11 +71,15 @@ export async function decideFinding(
   });
 }
 
-/** Grants a waiver for a margin or a limit that is not met, at the number it has now. */
+/**
+ * Grants a waiver for a margin or a limit that is not met, at the number it has now.
+ * @param shown the margin that the person saw (null: unknown); another one is not waived
+ */
 export async function grantWaiver(
   member: ActingMember,
   about: About,
   subject: WaiverSubject,
+  shown: number | null,
   reason: string,
 ): Decided {
   return decide(member, about, (review, common) => {
@@ -83,6 +89,7 @@ export async function grantWaiver(
     const margin = waivableMargin(review, subject);
     if (margin === undefined) return fail({ kind: "nothingToWaive" });
     if (isWaived(review, subject)) return fail({ kind: "alreadySo" });
+    if (!Object.is(margin, shown)) return fail({ kind: "changedMeanwhile" });
     const granted = review.decisions.filter((decision) => decision.kind === "waiver").length;
     return ok({
       ...common,
@@ -112,8 +119,11 @@ export async function withdrawWaiver(
   });
 }
 
-/** The margin that a waiver would cover; null: unknown; undefined: there is nothing to waive. */
-function waivableMargin(review: ReviewOf, subject: WaiverSubject): number | null | undefined {
+/** The margin that a waiver would cover, as its dialog shows it; null: unknown; undefined: there is nothing to waive. */
+export function waivableMargin(
+  review: ReviewOf,
+  subject: WaiverSubject,
+): number | null | undefined {
   if ("limit" in subject) {
     const row = review.result?.limits.find(
       (one) => one.condition === subject.condition && limitSubject(one) === subject.limit,

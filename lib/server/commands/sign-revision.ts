@@ -49,8 +49,8 @@ export async function signRevision(
       },
     );
     if (!may.ok) return may;
-    const now: Readonly<Record<string, string | null>> = { ...review.bound };
-    const changed = Object.entries(seen).filter(([name, digest]) => now[name] !== digest);
+    // What was not shown counts as changed: nobody signs unseen.
+    const changed = Object.entries(review.bound).filter(([name, digest]) => seen[name] !== digest);
     if (changed.length > 0)
       return fail({ kind: "changedMeanwhile", what: changed.map(([name]) => name) });
     const at = about.at ?? new Date().toISOString();

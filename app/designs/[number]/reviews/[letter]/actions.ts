@@ -31,6 +31,8 @@ const subject = z.union([
   z.object({ part: text, rule: text, condition: text }),
   z.object({ limit: text, condition: text }),
 ]);
+/** The margin that the page showed: another one is not waived. */
+const margin = z.number().nullable();
 /** What the page showed: a signature given to something else is refused. */
 const digests = z.record(z.string(), z.string().nullable());
 const meaning = z.enum(["authored", "reviewed", "approved"]);
@@ -61,11 +63,13 @@ export async function reopenAction(given: About, finding: string, reason: string
 export async function waiveAction(
   given: About,
   waived: z.infer<typeof subject>,
-  _shown: number | null,
+  shown: number | null,
   reason: string,
 ): Promise<Deed> {
   const where = about.parse(given);
-  return decided((member) => grantWaiver(member, where, subject.parse(waived), text.parse(reason)));
+  return decided((member) =>
+    grantWaiver(member, where, subject.parse(waived), margin.parse(shown), text.parse(reason)),
+  );
 }
 
 export async function withdrawAction(given: About, waiver: string, reason: string): Promise<Deed> {
