@@ -97,6 +97,7 @@ test("from a doubtful revision to a record that anyone can verify", async ({
   // 4. The draft: edited by one, seen live by another, its voltages following; then frozen.
   await mara.goto("/designs/FFC-2");
   const jonas = await pageOf(browser, "Jonas", "/designs/FFC-2");
+  for (const page of [mara, jonas]) await expect(page.getByText(/Solved in \d+ ms/)).toBeVisible();
   await changeValue(mara, "R7", "Resistance", "31k6");
   await expect(jonas.getByRole("list").filter({ hasText: "R7 33k to 31k6" })).toBeVisible();
   await changeValue(mara, "K1", "Resistance", "400 Ω");
