@@ -6,15 +6,29 @@ import { Piscina } from "piscina";
 import { type ClaimedRun, LEASE_MS, type SolverRuns } from "../database/solver-runs";
 import type { RunOutcome, RunProgress, RunTask } from "./run-task";
 
-/** What became of a run that this worker was woken for. */
-export type RunEnd = "done" | "failed" | "notOurs" | "leaseLost";
+/** What became of a run that this worker was woken for; one given back waits for another attempt. */
+export type RunEnd = "done" | "failed" | "givenBack" | "notOurs" | "leaseLost";
+
+/** A run may take this long; what takes longer would keep everybody else waiting. */
+const TIME_LIMIT_MS = 10 * 60_000;
+/** The memory of one run, MB. */
+const MOST_MEMORY_MB = 1536;
 
 /** Computes runs in a thread, so that the worker can say meanwhile that it lives. */
 export class RunComputer {
   private readonly threads: Piscina;
 
-  constructor(private readonly runs: SolverRuns) {
-    this.threads = new Piscina({ filename: threadFile(), minThreads: 1, maxThreads: 1 });
+  constructor(
+    private readonly runs: SolverRuns,
+    private readonly timeLimitMs = TIME_LIMIT_MS,
+    program = threadFile(),
+  ) {
+    this.threads = new Piscina({
+      filename: program,
+      minThreads: 1,
+      maxThreads: 1,
+      resourceLimits: { maxOldGenerationSizeMb: MOST_MEMORY_MB },
+    });
   }
 
   /** Claims a run, computes it and stores its result; each step only while the lease is ours. */
@@ -33,18 +47,17 @@ export class RunComputer {
       );
     };
     const heartbeat = setInterval(renew, LEASE_MS / 3);
+    const late = AbortSignal.timeout(this.timeLimitMs);
+    const halt = AbortSignal.any([lost.signal, late]);
     try {
-      const outcome = await this.compute(claimed, lost.signal, (told) => {
+      const outcome = await this.compute(claimed, halt, (told) => {
         progress = told;
         renew();
       });
       return await this.store(claimed, outcome);
     } catch (error) {
       if (lost.signal.aborted) return "leaseLost";
-      const reason = error instanceof Error ? error.message : String(error);
-      return (await this.runs.fail(claimed, `The computation broke off: ${reason}`))
-        ? "failed"
-        : "leaseLost";
+      return await this.brokenOff(claimed, error, late.aborted);
     } finally {
       clearInterval(heartbeat);
     }
@@ -73,6 +86,19 @@ export class RunComputer {
     }
   }
 
+  /** What would happen again at each attempt fails; anything else is tried again. */
+  private async brokenOff(run: ClaimedRun, error: unknown, late: boolean): Promise<RunEnd> {
+    const refusal = late
+      ? `The computation took longer than ${this.timeLimitMs / 60_000} minutes and was stopped. Take fewer parts or conditions.`
+      : isOutOfMemory(error)
+        ? `The computation took more than ${MOST_MEMORY_MB} MB and was stopped. Take fewer parts or conditions.`
+        : null;
+    if (refusal !== null) return this.store(run, { kind: "failed", sentence: refusal });
+    const end = await this.runs.giveBack(run, error instanceof Error ? error.message : `${error}`);
+    if (end === "leaseLost") return end;
+    return end === "waits" ? "givenBack" : "failed";
+  }
+
   private async store(run: ClaimedRun, outcome: RunOutcome): Promise<RunEnd> {
     const stored =
       outcome.kind === "done"
@@ -81,6 +107,10 @@ export class RunComputer {
     if (!stored) return "leaseLost";
     return outcome.kind;
   }
+}
+
+function isOutOfMemory(error: unknown): boolean {
+  return error instanceof Error && "code" in error && error.code === "ERR_WORKER_OUT_OF_MEMORY";
 }
 
 /** Built, it stands in `jobs` beside or next to the program that bundles this file; from source, beside this file. */
