@@ -36,6 +36,7 @@ export class SolverRuns {
       skipDuplicates: true,
     });
     if (count === 1) return true;
+    await this.lock(run.address);
     const again = await this.client.solverRun.updateMany({
       where: { address: run.address, state: "failed" },
       data: { state: "queued", attempts: 0, failure: null, finishedAt: null },
@@ -91,8 +92,20 @@ export class SolverRuns {
     return (await this.fail(run, sentence)) ? "givenUp" : "leaseLost";
   }
 
-  /** Calls off a run that nobody needs any more; whoever computes it finds its lease gone. @returns whether there was one */
+  /**
+   * Calls off a run unless a revision that was not returned needs it; whoever computes it finds its lease gone. To be
+   * called in a transaction, as `request` is: who asks for it meanwhile waits, and then has it queued again.
+   * @returns whether it was called off
+   */
   async cancel(address: string, sentence: string): Promise<boolean> {
+    await this.lock(address);
+    const needed = await this.client.revision.count({
+      where: {
+        OR: [{ runAddress: address }, { comparisonAddress: address }],
+        state: { not: "returned" },
+      },
+    });
+    if (needed > 0) return false;
     const { count } = await this.client.solverRun.updateMany({
       where: { address, state: { in: ["queued", "running"] } },
       data: { state: "failed", failure: sentence, lease: null, leaseUntil: null },
@@ -112,6 +125,11 @@ export class SolverRuns {
       where state = 'queued' or (state = 'running' and "leaseUntil" < ${NOW})
       order by "createdAt"`;
     return rows.map((row) => row.address);
+  }
+
+  private async lock(address: string): Promise<void> {
+    await this.client.$queryRaw`
+      select address from "SolverRun" where address = ${address} for update`;
   }
 
   private async end(

@@ -59,6 +59,25 @@ describe("what is decided", () => {
     expect((await registerView(shop.outsider)).rows).toEqual([]);
   });
 
+  it("lie whole in a record: every entry of the workspace's chain, as stored", async () => {
+    const { audit } = good(await recordInputs(shop.designer, FAN, "A"));
+    expect(auditChainFault(audit)).toBeNull();
+    expect(audit[0]?.seq).toBe(1);
+    const client = connect(shop.fresh.url);
+    expect(audit).toHaveLength(await client.auditEntry.count());
+    // A hole, as only the database's owner could tear it, is carried along for the verifier to find.
+    await client.$executeRaw`alter table "AuditEntry" disable trigger audit_entry_stays`;
+    const torn = await client.auditEntry.delete({
+      where: { workspaceId_seq: { workspaceId: shop.designer.workspace, seq: 3 } },
+    });
+    const holed = good(await recordInputs(shop.designer, FAN, "A"));
+    expect(holed.audit).toHaveLength(audit.length - 1);
+    expect(auditChainFault(holed.audit)).toContain("missing between 2 and 4");
+    await client.auditEntry.create({ data: { ...torn, payload: torn.payload ?? {} } });
+    await client.$executeRaw`alter table "AuditEntry" enable trigger audit_entry_stays`;
+    await client.$disconnect();
+  });
+
   it("stand: neither rows nor finished runs can be changed, and the audit chain holds", async () => {
     const client = connect(shop.fresh.url);
     const attempts = [

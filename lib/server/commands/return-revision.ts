@@ -1,4 +1,5 @@
 import { randomUUID } from "node:crypto";
+import { SolverRuns } from "../../database/solver-runs";
 import type { Decision } from "../../review/review-state";
 import { fail, ok, type Result } from "../../values/result";
 import { inTransaction, storeDecision } from "../decide";
@@ -32,6 +33,10 @@ export async function returnRevision(
       where: { designId_letter: { designId: design.value.id, letter: about.letter } },
       data: { state: "returned" },
     });
+    const runs = new SolverRuns(transaction);
+    const { runAddress, comparisonAddress } = review.value.revision;
+    for (const address of [runAddress, comparisonAddress])
+      await runs.cancel(address, "The revision was returned before this was computed.");
     await storeDecision(transaction, member.workspace, design.value.id, decision);
     return ok(decision);
   });

@@ -2,10 +2,14 @@ import { database } from "../../database/client";
 import type { RecordInputs } from "../../record/review-record";
 import { fail, ok, type Result } from "../../values/result";
 import type { NotFound } from "../commands/design-of";
-import { reviewOf } from "../review-of";
+import { type ReviewOf, reviewOf } from "../review-of";
 import type { ActingMember } from "../sign-in";
 
-/** What the record of a revision is built from, but for the cautions; the audit entries are those of its design. */
+/**
+ * What the record of a revision is built from, but for the cautions. The audit entries are the whole
+ * workspace's, up to the one that tells of this release: a chain by hash is checked link by link, so that leaving out
+ * other designs' entries would leave nothing to check. They are given as stored: a gap is for whoever verifies to see.
+ */
 export async function recordInputs(
   member: ActingMember,
   number: string,
@@ -20,11 +24,7 @@ export async function recordInputs(
     select: { name: true },
   });
   const { revision, base, people, file, baseFile } = review;
-  const until = revision.releasedAt ?? new Date();
-  const entries = await database().auditEntry.findMany({
-    where: { workspaceId: member.workspace, at: { lte: until } },
-    orderBy: { seq: "asc" },
-  });
+  const entries = await entriesUntil(member.workspace, review);
   return ok({
     design: { number, title: review.design.title, workspace: workspace.name },
     revision: {
@@ -55,7 +55,7 @@ export async function recordInputs(
       ...person,
       independent: !revision.authors.includes(person.id),
     })),
-    audit: consecutive(entries).map((entry) => ({
+    audit: entries.map((entry) => ({
       seq: entry.seq,
       at: entry.at.toISOString(),
       actor: entry.actor,
@@ -71,10 +71,20 @@ export async function recordInputs(
   });
 }
 
-/** The unbroken run of entries up to the first gap: a chain is checked link by link. */
-function consecutive<T extends { readonly seq: number }>(entries: readonly T[]): readonly T[] {
-  const gap = entries.findIndex(
-    (entry, index) => index > 0 && entry.seq !== (entries[index - 1]?.seq ?? 0) + 1,
-  );
-  return gap === -1 ? entries : entries.slice(0, gap);
+/** By the place in the chain and not by time, which may run back between entries. Without a release: all. */
+async function entriesUntil(workspace: string, review: ReviewOf) {
+  const last = await database().auditEntry.findFirst({
+    where: {
+      workspaceId: workspace,
+      subject: review.design.id,
+      action: "release",
+      payload: { path: ["revision"], equals: review.revision.letter },
+    },
+    orderBy: { seq: "desc" },
+    select: { seq: true },
+  });
+  return database().auditEntry.findMany({
+    where: { workspaceId: workspace, ...(last !== null && { seq: { lte: last.seq } }) },
+    orderBy: { seq: "asc" },
+  });
 }
