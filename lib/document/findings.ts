@@ -38,8 +38,19 @@ export function addRemark(
   if (remarks instanceof Y.Array) doc.transact(() => remarks.push([{ id: freshId(), ...remark }]));
 }
 
-/** The findings of a document, numbered in the order they were raised; what is no finding is passed over. */
+/**
+ * The findings of a document by number; what is no finding is passed over. Numbers follow the order they
+ * were raised in, but those that a release has settled stay: a finding that is merged late, whatever its date, comes after.
+ */
 export function readFindings(doc: Y.Doc): readonly Finding[] {
+  const settled = new Map(
+    readDecisions(doc).flatMap((decision) =>
+      decision.kind === "release"
+        ? decision.findings.map((one): [string, number] => [one.id, one.number])
+        : [],
+    ),
+  );
+  let last = Math.max(0, ...settled.values());
   return entriesOf(topLevel(doc, "findings"))
     .flatMap(([id, map]): Omit<Finding, "number">[] => {
       const anchor = anchorOf(map.get("anchor"));
@@ -63,7 +74,13 @@ export function readFindings(doc: Y.Doc): readonly Finding[] {
       ];
     })
     .sort((a, b) => (a.at === b.at ? (a.id < b.id ? -1 : 1) : a.at < b.at ? -1 : 1))
-    .map((finding, index) => ({ ...finding, number: index + 1 }));
+    .map((finding) => {
+      const number = settled.get(finding.id);
+      if (number !== undefined) return { ...finding, number };
+      last += 1;
+      return { ...finding, number: last };
+    })
+    .sort((a, b) => a.number - b.number);
 }
 
 /** The decisions that the server has mirrored, oldest first. */

@@ -31,7 +31,7 @@ export interface Remark {
 /** Words, from the shared document. Immutable but for appended remarks. */
 export interface Finding {
   readonly id: string;
-  /** Running number in the design, by time raised. */
+  /** Running number in the design, by time raised; settled by the first release that knows it. */
   readonly number: number;
   readonly anchor: Anchor;
   readonly severity: Severity;
@@ -79,7 +79,12 @@ export type Decision =
       readonly method: string;
       readonly name: string;
     })
-  | (DecisionBody & { readonly kind: "release"; readonly revision: string })
+  | (DecisionBody & {
+      readonly kind: "release";
+      readonly revision: string;
+      /** The findings as they stood stored at the release: what comes later, whatever its date, is none of it; their numbers are settled. */
+      readonly findings: readonly Finding[];
+    })
   | (DecisionBody & {
       readonly kind: "return";
       readonly revision: string;

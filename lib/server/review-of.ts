@@ -67,7 +67,7 @@ export async function reviewOf(
   const allDecisions = await decisionsOf(design.value.id, client);
   const people = await peopleOf(member.workspace, client);
   const allFindings = await findingsOf(design.value.id, client);
-  const { decisions, findings } = asReleased(revision.releasedAt, allDecisions, allFindings);
+  const { decisions, findings } = asReleased(letter, allDecisions, allFindings);
   const result = run?.result == null ? null : storedResult(run.result);
   const comparison = comparisonRun?.result == null ? null : storedComparison(comparisonRun.result);
   const file = storedCircuit(revision.circuit);
@@ -117,23 +117,17 @@ export async function reviewOf(
   });
 }
 
-/** What is said and decided after a release belongs to a later revision: a released one stays as it was signed. */
+/** What is stored after a release belongs to a later revision, whatever its date: a released one stays as it was signed. */
 function asReleased(
-  releasedAt: Date | null,
+  letter: string,
   decisions: readonly Decision[],
   findings: readonly Finding[],
 ): { readonly decisions: readonly Decision[]; readonly findings: readonly Finding[] } {
-  if (releasedAt === null) return { decisions, findings };
-  const until = releasedAt.toISOString();
-  return {
-    decisions: decisions.filter((decision) => decision.at <= until),
-    findings: findings
-      .filter((finding) => finding.at <= until)
-      .map((finding) => ({
-        ...finding,
-        remarks: finding.remarks.filter((remark) => remark.at <= until),
-      })),
-  };
+  const end = decisions.findIndex((one) => one.kind === "release" && one.revision === letter);
+  const release = decisions[end];
+  return release?.kind === "release"
+    ? { decisions: decisions.slice(0, end + 1), findings: release.findings }
+    : { decisions, findings };
 }
 
 /** The signatures of the revision that are bound to what stands now; others are void. */

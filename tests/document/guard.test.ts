@@ -118,6 +118,7 @@ describe("who may write what", () => {
       user: "ann",
       at: AT,
       revision: "A",
+      findings: [],
     } as const;
     const update = decisionUpdate(decision);
     expect(verdict(update, writer("designer", "ann"))).toBe("forbidden");

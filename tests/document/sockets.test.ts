@@ -142,6 +142,7 @@ it("shows a decision that a command stored", async () => {
     user: "bob",
     at: "2026-03-02T09:00:00.000Z",
     revision: "A",
+    findings: [],
   } as const;
   await store.append(design, [{ bytes: decisionUpdate(decision), author: "bob" }]);
   await ann.until((doc) => topLevel(doc, "decisions").has("d1"));

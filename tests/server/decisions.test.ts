@@ -2,13 +2,15 @@ import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import * as Y from "yjs";
 import { database } from "../../lib/database/client";
 import { PostgresDocumentStore } from "../../lib/database/document-store";
-import { raiseFinding } from "../../lib/document/findings";
+import { decisionUpdate } from "../../lib/document/decision-update";
+import { raiseFinding, readFindings } from "../../lib/document/findings";
+import type { Decision } from "../../lib/review/review-state";
 import { freezeRevision } from "../../lib/server/commands/freeze-revision";
 import { returnRevision } from "../../lib/server/commands/return-revision";
 import { checkItem, decideFinding, grantWaiver } from "../../lib/server/commands/review-decisions";
 import { signRevision } from "../../lib/server/commands/sign-revision";
 import { storedDocument } from "../../lib/server/document-state";
-import { reviewOf } from "../../lib/server/review-of";
+import { reviewOf, standingSignatures } from "../../lib/server/review-of";
 import { provePassword } from "../../lib/server/sign-in";
 import { COIL, FAN, good, MINUTE_MS, PASSWORD, Shop, setResistance } from "./shop";
 
@@ -110,6 +112,54 @@ describe("decisions about a revision", () => {
     },
     MINUTE_MS,
   );
+
+  it("leave a released revision and the numbers it settled alone, however late findings are dated", async () => {
+    const raise = (text: string, at: string) =>
+      shop.write(shop.reviewer, (doc) => {
+        raiseFinding(doc, {
+          anchor: { net: "TREF" },
+          severity: "observation",
+          text,
+          was: null,
+          revision: "A",
+          author: shop.reviewer.user,
+          at,
+        });
+      });
+    const before = good(await reviewOf(shop.designer, FAN, "A"));
+    await raise("Written on the train, long ago", "2020-01-01T00:00:00.000Z");
+    const after = good(await reviewOf(shop.designer, FAN, "A"));
+    expect(after.bound).toEqual(before.bound);
+    expect(standingSignatures(after).map(({ meaning }) => meaning)).toEqual([
+      "authored",
+      "reviewed",
+      "approved",
+    ]);
+  });
+
+  it("settle the numbers of findings at a release", () => {
+    const doc = new Y.Doc();
+    const raise = (text: string, at: string) =>
+      raiseFinding(doc, {
+        anchor: { net: "TREF" },
+        severity: "observation",
+        text,
+        was: null,
+        revision: "A",
+        author: "somebody",
+        at,
+      });
+    const at = "2026-05-01T00:00:00.000Z";
+    raise("first", at);
+    const findings = readFindings(doc);
+    const release: Decision = { id: "r", kind: "release", user: "u", at, revision: "A", findings };
+    Y.applyUpdate(doc, decisionUpdate(release));
+    raise("merged later, dated earlier", "2020-01-01T00:00:00.000Z");
+    expect(readFindings(doc).map(({ text, number }) => [number, text])).toEqual([
+      [1, "first"],
+      [2, "merged later, dated earlier"],
+    ]);
+  });
 
   it("refuse a signature on something else than what was seen", async () => {
     const proof = good(await provePassword(shop.designer, PASSWORD));

@@ -5,7 +5,7 @@ import type { Decision } from "../../review/review-state";
 import { type MayNotSign, type Meaning, maySign } from "../../review/signing";
 import { fail, ok, type Result } from "../../values/result";
 import { inTransaction, storeDecision } from "../decide";
-import { reviewOf, standingSignatures } from "../review-of";
+import { type ReviewOf, reviewOf, standingSignatures } from "../review-of";
 import type { ActingMember, Proof } from "../sign-in";
 import { lockedDesignOf, type NotFound } from "./design-of";
 import type { About } from "./review-decisions";
@@ -67,7 +67,7 @@ export async function signRevision(
     };
     const signed = { workspace: member.workspace, design: design.value.id, user: member.user };
     await storeDecision(transaction, signed.workspace, signed.design, signature);
-    if (meaning === "approved") await release(transaction, signed, about.letter, at);
+    if (meaning === "approved") await release(transaction, signed, review, at);
     return ok(signature);
   });
 }
@@ -76,9 +76,10 @@ export async function signRevision(
 async function release(
   transaction: TransactionClient,
   by: { readonly workspace: string; readonly design: string; readonly user: string },
-  letter: string,
+  review: ReviewOf,
   at: string,
 ): Promise<void> {
+  const { letter } = review.revision;
   await transaction.revision.updateMany({
     where: { designId: by.design, state: "released" },
     data: { state: "superseded" },
@@ -93,5 +94,6 @@ async function release(
     user: by.user,
     at,
     revision: letter,
+    findings: review.findings,
   });
 }
