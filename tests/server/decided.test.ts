@@ -80,6 +80,7 @@ describe("what is decided", () => {
 
   it("stand: neither rows nor finished runs can be changed, and the audit chain holds", async () => {
     const client = connect(shop.fresh.url);
+    const { revision } = good(await reviewOf(shop.designer, FAN, "A"));
     const attempts = [
       client.decision.updateMany({ data: { kind: "check" } }),
       client.decision.deleteMany(),
@@ -88,6 +89,10 @@ describe("what is decided", () => {
       client.revision.updateMany({ data: { circuit: "{}" } }),
       client.revision.updateMany({ data: { runAddress: "another" } }),
       client.solverRun.updateMany({ where: { state: "done" }, data: { result: "{}" } }),
+      client.solverRun.deleteMany(),
+      client.revision.create({
+        data: { ...revision, id: "without", letter: "Z", runAddress: "no run" },
+      }),
       client.$executeRaw`truncate "Decision"`,
     ];
     const ends = await Promise.allSettled(attempts);

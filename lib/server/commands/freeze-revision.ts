@@ -68,7 +68,6 @@ export async function freezeRevision(
       runAddress: solveAddress(circuit.digest),
       comparisonAddress: compareAddress(circuit.digest, base?.digest ?? null),
     };
-    await transaction.revision.create({ data: revision });
     const runs = new SolverRuns(transaction);
     const proposed = { proposed: text, engine: engineVersion };
     await runs.request({ ...proposed, address: revision.runAddress, kind: "solve", base: null });
@@ -78,6 +77,7 @@ export async function freezeRevision(
       kind: "compare",
       base: base?.circuit ?? null,
     });
+    await transaction.revision.create({ data: revision });
     await appendAudit(transaction, member.workspace, {
       at,
       actor: member.user,
