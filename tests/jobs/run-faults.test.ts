@@ -147,6 +147,40 @@ describe("a run that should not go on", () => {
     expect(await runs.cancel("called off", "Again.")).toBe(false);
   });
 
+  it("goes on while a revision needs it, and can be asked for again after it was called off", async () => {
+    await ask("wanted");
+    await client.workspace.create({
+      data: {
+        name: "Ours",
+        designs: {
+          create: {
+            number: "FFC-2",
+            title: "Fan",
+            revisions: {
+              create: {
+                letter: "A",
+                circuit,
+                digest: "sha256:0",
+                changeNote: "First issue",
+                authors: [],
+                frozenAt: new Date(),
+                state: "underReview",
+                runAddress: "wanted",
+                comparisonAddress: "wanted",
+              },
+            },
+          },
+        },
+      },
+    });
+    expect(await runs.cancel("wanted", "Returned.")).toBe(false);
+    await client.revision.updateMany({ data: { state: "returned" } });
+    expect(await runs.cancel("wanted", "Returned.")).toBe(true);
+    expect(await runs.claim("wanted", "late")).toBeNull();
+    await ask("wanted");
+    expect(await row("wanted")).toMatchObject({ state: "queued", attempts: 0, failure: null });
+  });
+
   it("is refused with a sentence where the file has too many parts, or cannot be read", async () => {
     const resistors = Array.from({ length: 20_001 }, (_, index) => [
       `R${index + 1}`,
