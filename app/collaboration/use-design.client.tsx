@@ -4,15 +4,28 @@ import { useCallback, useEffect, useRef, useState, useSyncExternalStore } from "
 import type * as Y from "yjs";
 import { project } from "../../lib/document/projection";
 import type { SaveState } from "../wording/save-words";
-import { connectDesign, type DesignConnection } from "./connect-design.client";
+import { connectDesign, type DesignConnection, type Refused } from "./connect-design.client";
 
-/** Opens a design while the component stands; null until it runs in a browser. */
+/**
+ * Opens a design while the component stands; null until it runs in a browser. After a refusal it is opened anew, from what
+ * is stored; `refused()` of the new connection has the copy.
+ */
 export function useDesign(designId: string, userId: string): DesignConnection | null {
   const [connection, setConnection] = useState<DesignConnection | null>(null);
   useEffect(() => {
     const url = `${location.origin.replace(/^http/, "ws")}/doc`;
-    const opened = connectDesign({ designId, userId, url });
-    setConnection(opened);
+    let opened: DesignConnection;
+    const open = (after: Refused | null): void => {
+      opened = connectDesign({ designId, userId, url, ...(after !== null && { after }) });
+      opened.onStatus(() => {
+        const refused = opened.refused();
+        if (refused === after || refused?.reopen !== true) return;
+        opened.close();
+        open(refused);
+      });
+      setConnection(opened);
+    };
+    open(null);
     return () => opened.close();
   }, [designId, userId]);
   return connection;

@@ -23,7 +23,7 @@ export class PageLine {
    */
   constructor(
     url: string,
-    user: string | null,
+    private readonly user: string | null,
     readonly doc: Y.Doc = new Y.Doc(),
   ) {
     this.socket = new WebSocket(url, { headers: user === null ? {} : { "x-user": user } });
@@ -51,13 +51,15 @@ export class PageLine {
     this.socket.send(message);
   }
 
-  /** Resolves when something holds; looks after each message and at the end of the line. */
+  /** Resolves when something holds; looks after each message. Rejects when the line ends before. */
   until(holds: (line: this) => boolean): Promise<void> {
-    return new Promise((resolve) => {
+    return new Promise((resolve, reject) => {
       const look = () => {
-        if (!holds(this)) return;
+        if (holds(this)) resolve();
+        else if (this.socket.readyState === WebSocket.CLOSED)
+          reject(new Error(`The line of ${this.user} ended before.`));
+        else return;
         this.waiting.delete(look);
-        resolve();
       };
       this.waiting.add(look);
       look();
