@@ -11,11 +11,13 @@ export interface GuardedWriter extends Writer {
 /** `missing`: what the update builds on is not here; the sender comes back and sends it all. */
 export type Refusal =
   | { readonly kind: "malformed" | "missing" | "forbidden" | "tooLarge"; readonly why: string }
-  | { readonly kind: "unclaimed"; readonly clientId: number };
+  | { readonly kind: "unclaimed"; readonly clientIds: readonly number[] };
 
 const LARGEST_UPDATE = 1 << 20;
 const MOST_STRUCTS = 50_000;
 const LONGEST_RUN = 1 << 20;
+/** Of one update: a page that was often opened without a line brings one for each time. */
+const MOST_CLIENT_IDS = 256;
 
 type Decoded = ReturnType<typeof Y.decodeUpdate>;
 type Struct = Y.Item | Y.GC;
@@ -67,33 +69,38 @@ function refuse(
 function order(doc: Y.Doc, decoded: Decoded, writer: GuardedWriter): Result<Incoming, Refusal> {
   const structs = new Map<number, Struct[]>();
   const next = new Map<number, number>();
+  const unclaimed = new Set<number>();
   for (const struct of decoded.structs) {
     if (struct instanceof Y.Skip) return refuse("missing", "a gap");
     const { client } = struct.id;
     const known = next.get(client) ?? Y.getState(doc.store, client);
-    const refusal = extentFault(struct, known, writer);
+    const refusal = extentFault(struct, known);
     if (refusal !== null) return fail(refusal);
+    if (struct.id.clock + struct.length > known) {
+      const owned = writer.owns(client);
+      // Under another's id Yjs would swallow the owner's next edits.
+      if (owned === false) return refuse("forbidden", "a client id of another person");
+      if (owned === null) unclaimed.add(client);
+    }
     next.set(client, Math.max(known, struct.id.clock + struct.length));
     const list = structs.get(client);
     if (list === undefined) structs.set(client, [struct]);
     else list.push(struct);
   }
+  if (structs.size > MOST_CLIENT_IDS) return refuse("tooLarge", `${structs.size} client ids`);
+  if (unclaimed.size > 0) return fail({ kind: "unclaimed", clientIds: [...unclaimed] });
   return ok({ structs, next });
 }
 
 /** `known`: the clock up to which the client's structs are here or came before in this update. */
-function extentFault(struct: Struct, known: number, writer: GuardedWriter): Refusal | null {
+function extentFault(struct: Struct, known: number): Refusal | null {
   const { client, clock } = struct.id;
   const end = clock + struct.length;
   if (!(struct.length > 0 && struct.length <= LONGEST_RUN && end < 2 ** 31))
     return { kind: "malformed", why: "length of a struct" };
   if (!Number.isSafeInteger(client) || client < 0) return { kind: "malformed", why: "client id" };
   if (clock > known) return { kind: "missing", why: "earlier edits" };
-  if (end <= known) return null;
-  const owned = writer.owns(client);
-  if (owned === null) return { kind: "unclaimed", clientId: client };
-  // Under another's id Yjs would swallow the owner's next edits.
-  return owned ? null : { kind: "forbidden", why: "a client id of another person" };
+  return null;
 }
 
 function judgeWrite(

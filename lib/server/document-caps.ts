@@ -1,6 +1,8 @@
 /** What one connection may send. Bytes, and counts over time. */
 export const CAPS = {
   frameBytes: 4 << 20,
+  /** What a page may send before it is known who it is. */
+  early: { frames: 64, bytes: 256 << 10 },
   presenceBytes: 2 << 10,
   unsentBytes: 8 << 20,
   frames: { perSecond: 60, burst: 240 },

@@ -1,6 +1,7 @@
 import type { WebSocket } from "ws";
 import * as Y from "yjs";
 import { inspect, type Refusal } from "../document/guard";
+import { objectOf } from "../document/plain";
 import {
   type PageMessage,
   type PresenceEntry,
@@ -11,7 +12,7 @@ import {
 } from "../document/wire";
 import type { Role } from "../review/review-state";
 import { Allowance, CAPS, CLOSE } from "./document-caps";
-import { type DocumentRoom, isWhole, type Occupant } from "./document-room";
+import type { DocumentRoom, Occupant } from "./document-room";
 import type { DocumentStore, SignedIn } from "./document-store";
 
 const CLOSE_OF: Readonly<Record<Exclude<Refusal["kind"], "unclaimed">, number>> = {
@@ -20,6 +21,9 @@ const CLOSE_OF: Readonly<Record<Exclude<Refusal["kind"], "unclaimed">, number>> 
   forbidden: CLOSE.refused,
   tooLarge: CLOSE.refused,
 };
+
+/** Owns the client ids of edits that the server makes; no person has this id. */
+const SERVER = "";
 
 /** One page's socket in a room: reads, caps and judges what it sends, in the order it was sent. */
 export class DocumentConnection implements Occupant {
@@ -68,10 +72,10 @@ export class DocumentConnection implements Occupant {
   }
 
   receive(bytes: Uint8Array): void {
-    if (this.ended) return;
+    if (this.ended || isLargePresence(bytes)) return;
     const message = readMessage(bytes);
     if (message === null) this.end(CLOSE.malformed, "Not a message of this protocol.");
-    else if (message.kind === "presence") this.show(message.entries, bytes.length);
+    else if (message.kind === "presence") this.show(message.entries);
     else if (!this.mayGoOn(message)) this.end(CLOSE.tooMany, "Too many messages. Wait a moment.");
     else
       this.sequence = this.sequence
@@ -122,9 +126,7 @@ export class DocumentConnection implements Occupant {
       const refusal = judged.error;
       if (refusal.kind !== "unclaimed")
         return this.end(CLOSE_OF[refusal.kind], `Refused: ${refusal.why}.`);
-      const { clientId } = refusal;
-      const owned = await this.store.claimClientId(room.designId, clientId, person.userId);
-      this.owned.set(clientId, owned);
+      for (const clientId of refusal.clientIds) await this.claim(clientId);
       if (this.ended) return;
     }
     this.documentFrames += 1;
@@ -133,9 +135,23 @@ export class DocumentConnection implements Occupant {
     try {
       room.take({ bytes: update, author: person.userId }, (seq) => this.saved(frames, seq));
     } catch {
-      return room.close(CLOSE.comeBack, "The document is read again.");
+      room.close(CLOSE.comeBack, "The document is read again.");
     }
-    if (!isWhole(room.doc)) room.close(CLOSE.comeBack, "The document is read again.");
+  }
+
+  /**
+   * Whether a client id is, or hereby becomes, this person's. An owner is noted before the first edit is stored: edits
+   * that are there without one are the server's own, and nobody goes on under that id.
+   */
+  private async claim(clientId: number): Promise<boolean> {
+    const known = this.owned.get(clientId);
+    if (known !== undefined) return known;
+    const { store, room, person } = this;
+    const isWritten = Y.getState(room.doc.store, clientId) > 0;
+    const isServers = isWritten && (await store.claimClientId(room.designId, clientId, SERVER));
+    const owned = !isServers && (await store.claimClientId(room.designId, clientId, person.userId));
+    this.owned.set(clientId, owned);
+    return owned;
   }
 
   private saved(frames: number, seq: number): void {
@@ -143,13 +159,17 @@ export class DocumentConnection implements Occupant {
     this.send(savedMessage(frames, seq));
   }
 
-  /** Pages repeat what they hear of others; only a page's own entry counts. */
-  private show(entries: readonly PresenceEntry[], bytes: number): void {
-    const own = entries.find(
-      ({ clientId }) => this.presence === null || this.presence.clientId === clientId,
-    );
-    if (own === undefined || bytes > CAPS.presenceBytes || !this.presences.take(this.now())) return;
-    if (this.others().some(({ presence }) => presence?.clientId === own.clientId)) return;
+  /** Pages repeat what they hear of others; only a page's own entry counts, under the own name. */
+  private show(entries: readonly PresenceEntry[]): void {
+    this.sequence = this.sequence
+      .then(() => this.showOwn(entries))
+      .catch(() => this.end(CLOSE.notStored, "The server could not go on. Trying again."));
+  }
+
+  private async showOwn(entries: readonly PresenceEntry[]): Promise<void> {
+    const own = entries.find((entry) => entry.clientId === (this.presence ?? entry).clientId);
+    if (own === undefined || !showsOnly(own, this.person.userId)) return;
+    if (!this.presences.take(this.now()) || !(await this.claim(own.clientId)) || this.ended) return;
     this.presence = own;
     for (const other of this.others()) other.send(presenceMessage([own]));
   }
@@ -159,6 +179,17 @@ export class DocumentConnection implements Occupant {
       occupant instanceof DocumentConnection && occupant !== this ? [occupant] : [],
     );
   }
+}
+
+/** Whether it is of the presence's type, 1, and over its cap: such is passed over unread. */
+function isLargePresence(bytes: Uint8Array): boolean {
+  return bytes.length > CAPS.presenceBytes && ((bytes[0] ?? 0) & 127) === 1;
+}
+
+/** Whether an entry tells of nobody but this person. */
+function showsOnly(entry: PresenceEntry, userId: string): boolean {
+  const shown = objectOf(JSON.parse(entry.state))?.["person"];
+  return shown === undefined || objectOf(shown)?.["id"] === userId;
 }
 
 /** No structs, nothing deleted: a page that has nothing new says so in two bytes. */

@@ -50,9 +50,13 @@ export class DocumentRoom {
     return room;
   }
 
-  /** Applies an inspected update and stores it. `stored` runs after the commit, when all others have it. */
+  /**
+   * Applies an inspected update and stores it. `stored` runs after the commit, when all others have it.
+   * Throws where it cannot stand by itself; it is not stored then, and the room has to be closed.
+   */
   take(row: NewUpdate, stored: (seq: number) => void): void {
     Y.applyUpdate(this.doc, row.bytes);
+    if (!isWhole(this.doc)) throw new Error("The update builds on what is not here.");
     this.push({ kind: "row", row, stored });
   }
 
@@ -185,6 +189,6 @@ export class DocumentRoom {
 }
 
 /** Whether nothing waits for something that is not there. */
-export function isWhole(doc: Y.Doc): boolean {
+function isWhole(doc: Y.Doc): boolean {
   return doc.store.pendingStructs === null && doc.store.pendingDs === null;
 }

@@ -88,13 +88,19 @@ export function attachDocumentSockets(ports: {
     if (person === null) return turnAway(socket, CLOSE.signIn, "Sign in again.");
     const roles = await sessions.rights(person.userId, designId);
     const room = roles === null ? null : await roomOf(designId);
-    if (roles === null || room === null)
+    // Loading may take a while: what was taken away meanwhile counts.
+    const still = room === null ? null : await sessions.rights(person.userId, designId);
+    if (room !== null && still === null && room.occupants.size === 0)
+      room.close(CLOSE.comeBack, "");
+    if (room === null || still === null)
       return turnAway(socket, CLOSE.refused, "There is no such design, or it is not yours to see.");
     if (socket.readyState !== socket.OPEN) {
       if (room.occupants.size === 0) room.close(CLOSE.comeBack, "");
       return null;
     }
-    const connection = new DocumentConnection(socket, room, store, person, roles, clock.now);
+    const connection = new DocumentConnection(socket, room, store, person, still, () =>
+      clock.now(),
+    );
     connections.set(connection, designId);
     socket.once("close", () => {
       connections.delete(connection);
@@ -108,10 +114,12 @@ export function attachDocumentSockets(ports: {
     socket.on("error", () => socket.terminate());
     let connection: DocumentConnection | null = null;
     const early: Uint8Array[] = [];
+    let earlyBytes = 0;
     socket.on("message", (data: RawData) => {
       const bytes = bytesOf(data);
-      if (connection !== null) connection.receive(bytes);
-      else if (early.length < CAPS.stateRequests.burst) early.push(bytes);
+      if (connection !== null) return connection.receive(bytes);
+      earlyBytes += bytes.length;
+      if (early.length < CAPS.early.frames && earlyBytes <= CAPS.early.bytes) early.push(bytes);
       else socket.close(CLOSE.tooMany, "Wait for the document.");
     });
     admit(socket, request, designId)
