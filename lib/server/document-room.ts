@@ -103,6 +103,8 @@ export class DocumentRoom {
       this.queue = [];
       await this.storeBatch(batch);
       await this.readForeign();
+      // What made the room close may be in its copy: it must not get into a snapshot.
+      if (this.closed) return;
       if (this.held.size >= ROWS_TO_SNAPSHOT && this.queue.length === 0) await this.fold();
     }
     this.working = false;
