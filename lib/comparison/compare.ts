@@ -30,8 +30,9 @@ export function compare(
   proposed: Side,
   onProgress?: (done: number, of: number, step: string) => void,
 ): Comparison {
-  const matching = matchParts(base.file, proposed.file);
-  const nets = renamedNets(base.file, proposed.file, matching);
+  const byName = matchParts(base.file, proposed.file);
+  const nets = renamedNets(base.file, proposed.file, byName);
+  const matching = matchParts(base.file, proposed.file, nets);
   const renamed = renameBase(base.file, matching, nets);
   const read = readCircuitFile(renamed);
   // A renamed base that cannot be read any longer is compared under its old names.

@@ -14,8 +14,16 @@ export interface Matching {
   readonly added: readonly { readonly block: string; readonly part: FilePart }[];
 }
 
-/** Matches parts block by block: by id where both sides have it, then by designator, then by kind and connection. */
-export function matchParts(base: CircuitFile, proposed: CircuitFile): Matching {
+/**
+ * Matches parts block by block: by id where both sides have it, then by designator, then by kind and
+ * connection. `nets` says which nets are only renamed (see `renamedNets`), so that a part which was
+ * renumbered and whose net was renamed is known by its connection all the same.
+ */
+export function matchParts(
+  base: CircuitFile,
+  proposed: CircuitFile,
+  nets: ReadonlyMap<string, string> = new Map(),
+): Matching {
   const pairs: PartPair[] = [];
   const removed: { block: string; part: FilePart }[] = [];
   const added: { block: string; part: FilePart }[] = [];
@@ -23,6 +31,8 @@ export function matchParts(base: CircuitFile, proposed: CircuitFile): Matching {
   for (const block of blocks) {
     const were = new Set(base.blocks[block]?.parts ?? []);
     const are = new Set(proposed.blocks[block]?.parts ?? []);
+    const sameConnection = (a: FilePart, b: FilePart): boolean =>
+      isConnectedAlike(a, b, (net) => nets.get(`${block}\n${net}`) ?? net);
     for (const same of [sameId, sameRef, sameConnection]) {
       for (const was of were) {
         const is = [...are].find((part) => part.kind === was.kind && same(was, part));
@@ -47,10 +57,13 @@ function sameRef(a: FilePart, b: FilePart): boolean {
   return a.ref === b.ref && (a.id === undefined || b.id === undefined);
 }
 
-function sameConnection(a: FilePart, b: FilePart): boolean {
+function isConnectedAlike(a: FilePart, b: FilePart, renamed: (net: string) => string): boolean {
   if (a.id !== undefined && b.id !== undefined) return false;
   const pins = Object.entries(a.pins ?? {});
-  return pins.length > 0 && pins.every(([pin, net]) => b.pins?.[pin] === net);
+  return (
+    pins.length > 0 &&
+    pins.every(([pin, net]) => b.pins?.[pin] === (net === null ? null : renamed(net)))
+  );
 }
 
 /** How a part is called in edits: its designator, behind the block's name where it is not in the top block. */
