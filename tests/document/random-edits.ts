@@ -16,7 +16,7 @@ import {
 import type { DocumentEnd } from "../../lib/document/ends";
 import { topLevel } from "../../lib/document/shape";
 
-export const BLOCK = "main";
+const BLOCK = "main";
 const KINDS = ["resistor", "capacitor", "opAmp", "connector"] as const;
 const PINS = ["1", "2", "out"] as const;
 

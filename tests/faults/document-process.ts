@@ -1,5 +1,8 @@
 import { spawn } from "node:child_process";
 import { once } from "node:events";
+import { fileURLToPath } from "node:url";
+
+const PROGRAM = fileURLToPath(new URL("./document-program.ts", import.meta.url));
 
 export interface DocumentProcess {
   /** `ws://127.0.0.1:PORT` */
@@ -12,13 +15,7 @@ export interface DocumentProcess {
 export async function startDocumentProcess(databaseUrl: string): Promise<DocumentProcess> {
   const child = spawn(
     process.execPath,
-    [
-      "--import",
-      "tsx",
-      "--import",
-      "./lib/server/end-with-parent.mjs",
-      "tests/faults/document-program.ts",
-    ],
+    ["--import", "tsx", "--import", "./lib/server/end-with-parent.mjs", PROGRAM],
     {
       stdio: ["ignore", "inherit", "inherit", "ipc"],
       env: { ...process.env, DATABASE_URL: databaseUrl },
