@@ -31,7 +31,9 @@ const junction: Stressed = (state) => ({
   surgeCurrent: above(current(state, "anode")),
 });
 
+/** `current` is that through the channel, as `voltage` is that across it. */
 const fieldEffect: Stressed = (state) => ({
+  current: size(current(state, "drain")),
   voltage: size(voltage(state, "drain", "source")),
   drainSourceVoltage: size(voltage(state, "drain", "source")),
   drainGateVoltage: size(voltage(state, "drain", "gate")),
@@ -55,7 +57,12 @@ const nothing: Stressed = () => ({});
 const stressed: Readonly<Record<Kind, Stressed>> = {
   resistor: twoPin,
   // At an operating point no ripple flows; in a transient its root mean square counts.
-  capacitor: (state) => ({ ...twoPin(state), rippleCurrent: size(current(state, "1")) }),
+  // Pin 1 is the positive one of a polarised capacitor.
+  capacitor: (state) => ({
+    ...twoPin(state),
+    reverseVoltage: above(-voltage(state, "1", "2")),
+    rippleCurrent: size(current(state, "1")),
+  }),
   inductor: twoPin,
   coupling: nothing,
   voltageSource: source,
@@ -70,6 +77,7 @@ const stressed: Readonly<Record<Kind, Stressed>> = {
   schottky: junction,
   bjt: (state) => ({
     voltage: size(voltage(state, "collector", "emitter")),
+    current: size(current(state, "collector")),
     collectorEmitterVoltage: size(voltage(state, "collector", "emitter")),
     collectorCurrent: size(current(state, "collector")),
   }),

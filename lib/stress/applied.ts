@@ -1,7 +1,7 @@
 import type { Condition } from "../kinds/circuit";
 import type { Part } from "../kinds/part";
 import { stressedQuantities } from "../kinds/stressed-quantities";
-import type { ConditionResult } from "../mna/solution";
+import type { ConditionResult, Extreme } from "../mna/solution";
 
 /** What is applied to a part in one condition: the largest of each quantity, and what it is at the operating point. */
 export interface AppliedQuantities {
@@ -32,23 +32,73 @@ export function appliedQuantities(
     pinVoltages.push([pin, voltage]);
     currents.push([pin, current]);
   }
+  const measured = stressedQuantities(part, {
+    pinVoltages: Object.fromEntries(pinVoltages),
+    currents: Object.fromEntries(currents),
+    power: solved.power,
+    temperature: solved.temperature,
+  });
+  const heatsItself = selfHeated(part, condition);
   const steady = {
-    ...stressedQuantities(part, {
-      pinVoltages: Object.fromEntries(pinVoltages),
-      currents: Object.fromEntries(currents),
-      power: solved.power,
-      temperature: solved.temperature,
-    }),
+    ...measured,
     // Direct current is no ripple.
     ...(part.kind === "capacitor" && { rippleCurrent: 0 }),
-    ambientTemperature: condition.ambient,
+    ...(heatsItself && { junctionTemperature: solved.temperature }),
+    ambientTemperature: part.temperature ?? condition.ambient,
   };
+  const courses = partCourses(part, condition, result).map(
+    ([quantity, extreme]): [string, number] => [quantity, worstOf(quantity, extreme)],
+  );
+  const surroundings =
+    result.sweep === null ? {} : { ambientTemperature: hottest(part, condition) };
+  return { largest: { ...steady, ...Object.fromEntries(courses), ...surroundings }, steady };
+}
+
+/** The size that counts of a course: a voltage stresses by its magnitude, a temperature only by being high. */
+function worstOf(quantity: string, { min, max, rms }: Extreme): number {
+  if (BY_ROOT_MEAN_SQUARE.has(quantity)) return rms;
+  return quantity.toLowerCase().endsWith("temperature")
+    ? max
+    : Math.max(Math.abs(min), Math.abs(max));
+}
+
+/**
+ * The temperature around a part at which its ratings are taken, degrees Celsius: its own where it has
+ * one, else the ambient; over a sweep of the ambient the hottest, since a rating falls with temperature.
+ */
+export function hottest(part: Part, condition: Condition): number {
+  const { analysis, ambient } = condition;
+  if (part.temperature !== null) return part.temperature;
+  return analysis.type === "sweep" && analysis.of === "ambient"
+    ? Math.max(analysis.from, analysis.to)
+    : ambient;
+}
+
+/** The extremes of a part's quantities over a sweep or a transient, by quantity; none at an operating point. */
+export function partCourses(
+  part: Part,
+  condition: Condition,
+  result: ConditionResult,
+): readonly (readonly [quantity: string, extreme: Extreme])[] {
   const extremes = (result.transient ?? result.sweep)?.extremes[part.path] ?? {};
-  const courses = Object.entries(extremes).map(([quantity, extreme]): [string, number] => [
-    quantity,
-    BY_ROOT_MEAN_SQUARE.has(quantity)
-      ? extreme.rms
-      : Math.max(Math.abs(extreme.min), Math.abs(extreme.max)),
-  ]);
-  return { largest: { ...steady, ...Object.fromEntries(courses) }, steady };
+  const { temperature, junctionTemperature } = extremes;
+  if (temperature === undefined || junctionTemperature === undefined)
+    return Object.entries(extremes);
+  if (!selfHeated(part, condition)) return Object.entries(extremes);
+  // A sweep settles the temperature at each point. A transient stays at that of t = 0 while the power moves.
+  const warmth = temperature.max - condition.ambient;
+  const junction =
+    result.transient === null
+      ? temperature
+      : {
+          ...junctionTemperature,
+          min: junctionTemperature.min - warmth,
+          max: junctionTemperature.max - warmth,
+        };
+  return Object.entries({ ...extremes, junctionTemperature: junction });
+}
+
+/** Whether the part's temperature is its junction's already: ambient + power x junctionToAmbient, solved together. */
+function selfHeated(part: Part, condition: Condition): boolean {
+  return condition.selfHeating && part.temperature === null && part.junctionToAmbient !== null;
 }

@@ -2,7 +2,7 @@ import type { Circuit, Condition } from "../kinds/circuit";
 import type { Part } from "../kinds/part";
 import type { ConditionResult } from "../mna/solution";
 import type { Verdict } from "../values/verdict";
-import { type AppliedQuantities, appliedQuantities } from "./applied";
+import { type AppliedQuantities, appliedQuantities, hottest } from "./applied";
 import type { StressRow } from "./circuit-result";
 import { type DeratedLimit, deratedLimit } from "./derated-limit";
 import { chosenPolicy } from "./policy-catalogue";
@@ -50,7 +50,8 @@ function rulesFor(part: Part, policy: Policy): readonly Rule[] {
     if (typeof rule.style !== "string" || judged.has(rule.quantity)) return false;
     // A style by which a kind is told apart only for one quantity would be asked for in vain otherwise.
     judged.add(rule.quantity);
-    return part.ratings[ratingOf(rule)] !== undefined;
+    // A part that nothing else judges is asked all the same: it must not pass by saying nothing.
+    return fitting.length === 0 || part.ratings[ratingOf(rule)] !== undefined;
   });
   return [...fitting, ...asking];
 }
@@ -69,7 +70,7 @@ function judgedRow(
   const own = condition.parts.find((one) => one.path === part.path) ?? part;
   const applied = result === undefined ? null : appliedQuantities(own, condition, result);
   const limit = deratedLimit(rule.limit, own, {
-    temperature: condition.ambient,
+    temperature: hottest(own, condition),
     applied: applied?.largest ?? {},
     rules: policy.rules,
   });
