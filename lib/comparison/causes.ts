@@ -1,36 +1,30 @@
 import type { CircuitFile } from "../circuit/circuit-file";
-import { readCircuitFile } from "../kinds/read-circuit";
-import type { ConditionResult } from "../mna/solution";
-import type { StressRow } from "../stress/circuit-result";
-import { stressRows } from "../stress/stress-rows";
 import type { Cause, ComparisonProblem, NetShift, StressShift } from "./comparison";
 import type { FileEdit } from "./file-edit";
-import { pointResults } from "./point";
-import { grayCodeSubsets, shapleyShares } from "./shapley";
-
-/** With more edits than this every subset cannot be solved: those that touch the same part are taken together. */
-const MOST_PLAYERS = 8;
-
-/** What one combination of edits comes to, at the operating points. */
-interface Outcome {
-  readonly conditions: readonly ConditionResult[];
-  readonly stress: readonly StressRow[];
-}
-
-/** Edits that are made together and share one cause. */
-interface Player {
-  readonly edits: readonly FileEdit[];
-}
+import { type Outcome, outcomesOf } from "./outcomes";
+import { type Player, playersOf } from "./players";
+import { separableGroups, unionsOf } from "./separable";
+import { shapleyShares } from "./shapley";
 
 export interface Causes {
   readonly causes: readonly Cause[];
   readonly problems: readonly ComparisonProblem[];
 }
 
+/** One number that moved: what it was and is, and what it is under a combination of edits; null: it has none. */
+interface Moved {
+  readonly of: Omit<Cause, "edit" | "share">;
+  readonly was: number | null;
+  readonly is: number | null;
+  readonly read: (outcome: Outcome) => number | null;
+  /** Whether an edit may have a share in it. */
+  readonly touches: (edit: FileEdit) => boolean;
+}
+
 /**
  * For every loud shift of a node voltage and every margin that shrank: the fair share of each edit,
- * from solving every combination of edits. A combination that cannot be solved makes the shares of
- * its edits unknowable one by one; then they count as one cause, and it is said.
+ * from solving every combination of edits; the shares add up to the whole. Edits that have no
+ * solution without one another count as one cause, its share divided evenly, and it is said.
  */
 export function causesOf(
   base: CircuitFile,
@@ -38,155 +32,73 @@ export function causesOf(
   loudNets: readonly NetShift[],
   shrunk: readonly StressShift[],
 ): Causes {
-  const moving = edits.filter((edit) => edit.electrical);
-  if (moving.length === 0 || (loudNets.length === 0 && shrunk.length === 0))
-    return { causes: [], problems: [] };
-  const { players, problems } = playersOf(moving);
-  const results = solveSubsets(base, players);
-  if (results.size < 1 << players.length) {
-    return {
-      causes: together(moving, loudNets, shrunk),
-      problems: [
-        ...problems,
-        {
-          code: "editsInseparable",
-          message:
-            "Some combinations of the edits cannot be solved alone, so the edits count as one cause together.",
-        },
-      ],
-    };
-  }
-  const share = (read: (result: Outcome) => number | null): readonly number[] | null => {
-    const values = new Map<number, number>();
-    for (const [subset, result] of results) {
-      const value = read(result);
-      if (value === null) return null;
-      values.set(subset, value);
-    }
-    return shapleyShares(players.length, (subset) => values.get(subset) ?? 0);
-  };
-  const ofNets = loudNets.flatMap((shift) => {
-    const shares = share((result) => voltageIn(result, shift));
-    return shares === null
-      ? []
-      : perEdit(players, shares, {
-          net: shift.net,
-          quantity: "voltage",
-          condition: shift.condition,
-        });
-  });
-  const ofMargins = shrunk.flatMap((shift) => {
-    const shares = share((result) => marginIn(result, shift));
-    return shares === null
-      ? []
-      : perEdit(players, shares, {
-          part: shift.part,
-          quantity: "margin",
-          rule: shift.rule,
-          condition: shift.condition,
-        });
-  });
-  return { causes: [...ofNets, ...ofMargins], problems };
-}
-
-function playersOf(edits: readonly FileEdit[]): {
-  readonly players: readonly Player[];
-  readonly problems: readonly ComparisonProblem[];
-} {
-  if (edits.length <= MOST_PLAYERS)
-    return { players: edits.map((edit) => ({ edits: [edit] })), problems: [] };
-  const groups = new Map<string, FileEdit[]>();
-  for (const edit of edits) {
-    const place = edit.edit.part ?? edit.edit.condition ?? edit.edit.id;
-    groups.set(place, [...(groups.get(place) ?? []), edit]);
-  }
-  let players = [...groups.values()];
-  while (players.length > MOST_PLAYERS) {
-    const last = players.pop() ?? [];
-    players = [...players.slice(0, -1), [...(players.at(-1) ?? []), ...last]];
-  }
+  const moved = [...loudNets.map(movedVoltage), ...shrunk.map(movedMargin)].filter(
+    ({ was, is }) => was !== null && is !== null,
+  );
+  const able = edits.filter((edit) => moved.some(({ touches }) => touches(edit)));
+  if (able.length === 0) return { causes: [], problems: [] };
+  const { players, problems } = playersOf(able);
+  const outcomes = outcomesOf(base, players);
+  const inseparable = new Set<string>();
+  const causes = moved.flatMap((one) => sharesOf(one, players, outcomes, inseparable));
   return {
-    players: players.map((group) => ({ edits: group })),
+    causes,
     problems: [
-      {
-        code: "editsGrouped",
-        message: `${edits.length} edits are too many to combine one by one: they are taken in ${players.length} groups, and an edit's share is its group's share divided evenly.`,
-      },
+      ...problems,
+      ...[...inseparable].map((names) => ({
+        code: "editsInseparable",
+        message: `${names}: some combinations without one another have no solution, so they count as one cause, shared evenly.`,
+      })),
     ],
   };
 }
 
-function solveSubsets(base: CircuitFile, players: readonly Player[]): ReadonlyMap<number, Outcome> {
-  const results = new Map<number, Outcome>();
-  for (const subset of grayCodeSubsets(players.length)) {
-    let file = base;
-    players.forEach((player, index) => {
-      if ((subset & (1 << index)) === 0) return;
-      for (const edit of player.edits) file = edit.apply(file);
-    });
-    const circuit = readCircuitFile(file);
-    if (!circuit.ok) continue;
-    // Causes are about operating points: a transient is taken at its beginning.
-    const conditions = pointResults(circuit.value);
-    if (conditions !== null)
-      results.set(subset, { conditions, stress: stressRows(circuit.value, conditions, true) });
-  }
-  return results;
+function movedVoltage({ net, condition, was, is }: NetShift): Moved {
+  return {
+    of: { net, quantity: "voltage", condition },
+    was,
+    is,
+    read: ({ conditions }) => conditions.find((one) => one.name === condition)?.nets[net] ?? null,
+    touches: (edit) => edit.electrical,
+  };
 }
 
-function voltageIn(result: Outcome, shift: NetShift): number | null {
-  const condition = result.conditions.find((one) => one.name === shift.condition);
-  return condition?.nets[shift.net] ?? null;
+function movedMargin({ part, rule, condition, was, is }: StressShift): Moved {
+  return {
+    of: { part, quantity: "margin", rule, condition },
+    was,
+    is,
+    read: ({ stress }) =>
+      stress.find((row) => row.part === part && row.rule.id === rule && row.condition === condition)
+        ?.margin ?? null,
+    touches: (edit) => edit.electrical || edit.judging,
+  };
 }
 
-function marginIn(result: Outcome, shift: StressShift): number | null {
-  const row = result.stress.find(
-    (one) =>
-      one.part === shift.part && one.rule.id === shift.rule && one.condition === shift.condition,
-  );
-  return row?.margin ?? null;
-}
-
-function perEdit(
+function sharesOf(
+  moved: Moved,
   players: readonly Player[],
-  shares: readonly number[],
-  of: Omit<Cause, "edit" | "share">,
+  outcomes: ReadonlyMap<number, Outcome>,
+  inseparable: Set<string>,
 ): readonly Cause[] {
-  return players.flatMap((player, index) =>
-    player.edits.map((edit) => ({
+  const whole = (1 << players.length) - 1;
+  const values = new Map([...outcomes].map(([subset, outcome]) => [subset, moved.read(outcome)]));
+  // The two ends are as they were judged: so the shares add up to the shift that is shown.
+  values.set(0, moved.was);
+  values.set(whole, moved.is);
+  const value = (subset: number): number | null => values.get(subset) ?? null;
+  const groups = separableGroups(players.length, (subset) => value(subset) !== null);
+  const unions = unionsOf(groups);
+  const shares = shapleyShares(groups.length, (chosen) => value(unions[chosen] ?? 0) ?? Number.NaN);
+  return groups.flatMap((group, index) => {
+    const members = players.filter((_, player) => (group & (1 << player)) !== 0);
+    const edits = members.flat().filter(moved.touches);
+    if (members.length > 1 && edits.length > 1)
+      inseparable.add(edits.map(({ edit }) => edit.id).join(", "));
+    return edits.map((edit) => ({
       edit: edit.edit.id,
-      ...of,
-      share: (shares[index] ?? 0) / player.edits.length,
-    })),
-  );
-}
-
-/** One cause made of all edits, its share divided evenly. */
-function together(
-  edits: readonly FileEdit[],
-  loudNets: readonly NetShift[],
-  shrunk: readonly StressShift[],
-): readonly Cause[] {
-  const all: readonly Player[] = [{ edits }];
-  return [
-    ...loudNets.flatMap((shift) =>
-      shift.shift === null
-        ? []
-        : perEdit(all, [shift.shift], {
-            net: shift.net,
-            quantity: "voltage",
-            condition: shift.condition,
-          }),
-    ),
-    ...shrunk.flatMap((shift) =>
-      shift.was === null || shift.is === null
-        ? []
-        : perEdit(all, [shift.is - shift.was], {
-            part: shift.part,
-            quantity: "margin",
-            rule: shift.rule,
-            condition: shift.condition,
-          }),
-    ),
-  ];
+      ...moved.of,
+      share: (shares[index] ?? Number.NaN) / edits.length,
+    }));
+  });
 }

@@ -8,4 +8,6 @@ export interface FileEdit {
   readonly apply: (file: CircuitFile) => CircuitFile;
   /** Whether it can move a voltage. */
   readonly electrical: boolean;
+  /** Whether it can move a margin while every voltage stays: a rating, a style, the policy. */
+  readonly judging: boolean;
 }

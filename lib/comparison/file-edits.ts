@@ -3,6 +3,7 @@ import type { FileEdit } from "./file-edit";
 import { conditionEdits, limitEdits, policyEdits } from "./judgement-edits";
 import { type Matching, partName } from "./matching";
 import { sameWritten } from "./same-written";
+import { structureEdits } from "./structure-edits";
 
 /**
  * The edits between two files whose names agree (see `renameBase`): parts added and removed, values,
@@ -27,6 +28,7 @@ export function fileEdits(
       apply: (file) =>
         withParts(file, block, (parts) => parts.filter((one) => one.ref !== part.ref)),
       electrical: part.fitted !== false,
+      judging: false,
     }),
   );
   const added = matching.added.map(
@@ -39,12 +41,14 @@ export function fileEdits(
       },
       apply: (file) => withParts(file, block, (parts) => [...parts, part]),
       electrical: part.fitted !== false,
+      judging: false,
     }),
   );
   return [
     ...changed,
     ...added,
     ...removed,
+    ...structureEdits(base, proposed),
     ...conditionEdits(base, proposed),
     ...limitEdits(base, proposed),
     ...policyEdits(base, proposed),
@@ -53,23 +57,24 @@ export function fileEdits(
 
 /** Groups of keys that a part is compared by, and how an edit in each is called. */
 const GROUPS = [
-  { key: "params", change: "value", prefix: "", electrical: true },
-  { key: "tolerances", change: "value", prefix: "tolerances.", electrical: false },
-  { key: "set", change: "value", prefix: "set.", electrical: true },
-  { key: "ratings", change: "rating", prefix: "ratings.", electrical: false },
-  { key: "pins", change: "connection", prefix: "pins.", electrical: true },
+  { key: "params", change: "value", prefix: "", electrical: true, judging: false },
+  { key: "tolerances", change: "value", prefix: "tolerances.", electrical: false, judging: false },
+  { key: "set", change: "value", prefix: "set.", electrical: true, judging: false },
+  { key: "ratings", change: "rating", prefix: "ratings.", electrical: false, judging: true },
+  { key: "pins", change: "connection", prefix: "pins.", electrical: true, judging: false },
 ] as const;
 
 const SINGLES = [
-  { key: "style", electrical: false },
-  { key: "thermal", electrical: false },
-  { key: "drift", electrical: false },
-  { key: "temperature", electrical: true },
-  { key: "fitted", electrical: true },
-  { key: "control", electrical: true },
-  { key: "of", electrical: true },
-  { key: "fit", electrical: true },
-  { key: "block", electrical: true },
+  { key: "style", electrical: false, judging: true },
+  // Where parts heat themselves it moves their laws too.
+  { key: "thermal", electrical: true, judging: true },
+  { key: "drift", electrical: false, judging: false },
+  { key: "temperature", electrical: true, judging: true },
+  { key: "fitted", electrical: true, judging: false },
+  { key: "control", electrical: true, judging: false },
+  { key: "of", electrical: true, judging: false },
+  { key: "fit", electrical: true, judging: false },
+  { key: "block", electrical: true, judging: false },
 ] as const;
 
 const DRAWN = ["at", "turn", "mirror"] as const;
@@ -99,10 +104,11 @@ function partEdits(
         apply: (file) =>
           withPart(file, block, is.ref, (part) => withMember(part, group.key, key, after[key])),
         electrical: group.electrical,
+        judging: group.judging,
       });
     }
   }
-  for (const { key, electrical } of SINGLES) {
+  for (const { key, electrical, judging } of SINGLES) {
     if (JSON.stringify(was[key]) === JSON.stringify(is[key])) continue;
     edits.push({
       edit: {
@@ -115,6 +121,7 @@ function partEdits(
       },
       apply: (file) => withPart(file, block, is.ref, (part) => withKey(part, key, is[key])),
       electrical,
+      judging,
     });
   }
   if (DRAWN.some((key) => JSON.stringify(was[key]) !== JSON.stringify(is[key])))
@@ -122,6 +129,7 @@ function partEdits(
       edit: { id: `${name} moved`, change: "moved", part: name },
       apply: (file) => file,
       electrical: false,
+      judging: false,
     });
   return edits;
 }

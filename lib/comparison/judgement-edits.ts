@@ -71,6 +71,7 @@ function conditionEdit(
     apply,
     // A condition on one side only has nothing to be compared with.
     electrical: change === "value",
+    judging: false,
   };
 }
 
@@ -119,6 +120,7 @@ function limitEdit(
     },
     apply: (file) => file,
     electrical: false,
+    judging: false,
   };
 }
 
@@ -144,8 +146,9 @@ export function policyEdits(base: CircuitFile, proposed: CircuitFile): readonly 
   return [
     {
       edit: { id: "policy", change: "value", policy: is.use ?? "common-practice", was, is },
-      apply: (file) => file,
+      apply: (file) => ({ ...file, policy: is }),
       electrical: false,
+      judging: true,
     },
   ];
 }

@@ -21,19 +21,18 @@ export function pointVoltages(
 
 /**
  * Every condition's operating point (of a transient, its state at t = 0) as results, each from the one
- * before. null where a condition has no certified solution.
+ * before. One without a certified solution is `unsolvable`, with what is determined all the same.
  */
-export function pointResults(circuit: Circuit): readonly ConditionResult[] | null {
+export function pointResults(circuit: Circuit): readonly ConditionResult[] {
   const results: ConditionResult[] = [];
   let kept: Kept | null = null;
   for (const condition of circuit.conditions) {
     const time = condition.analysis.type === "transient" ? 0 : null;
     const point = operatingPoint(circuit, condition, time, kept);
-    if (point.faults.length > 0 || point.certificate === null) return null;
     kept = point.kept ?? kept;
     results.push({
       name: condition.name,
-      status: "solved",
+      status: point.faults.length > 0 || point.certificate === null ? "unsolvable" : "solved",
       nets: point.nets,
       parts: point.parts,
       certificate: point.certificate,
