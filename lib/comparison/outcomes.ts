@@ -5,7 +5,6 @@ import type { StressRow } from "../stress/circuit-result";
 import { stressRows } from "../stress/stress-rows";
 import type { Player } from "./players";
 import { pointResults } from "./point";
-import { grayCodeSubsets } from "./shapley";
 
 /** What one combination of edits comes to, at the operating points. */
 export interface Outcome {
@@ -16,7 +15,8 @@ export interface Outcome {
 /**
  * The base with every combination of the players' edits but none and all, solved and judged, by bit
  * mask. Combinations that come to no readable file are left out. Edits that only judge (a rating, the
- * policy) are judged on the solution that is there.
+ * policy) are judged on the solution that is there. Each combination is solved from the start, as the
+ * two sides were: from a neighbour's solution a circuit of two states might come to the other one.
  */
 export function outcomesOf(
   base: CircuitFile,
@@ -29,8 +29,7 @@ export function outcomesOf(
   );
   const solved = new Map<number, readonly ConditionResult[]>();
   const outcomes = new Map<number, Outcome>();
-  for (const subset of grayCodeSubsets(players.length)) {
-    if (subset === 0 || subset === whole) continue;
+  for (let subset = 1; subset < whole; subset++) {
     const circuit = readCircuitFile(fileWith(base, players, subset));
     if (!circuit.ok) continue;
     const conditions = solved.get(subset & moving) ?? pointResults(circuit.value);

@@ -34,8 +34,3 @@ function countBits(mask: number): number {
   for (let rest = mask; rest !== 0; rest &= rest - 1) bits += 1;
   return bits;
 }
-
-/** All subsets in Gray-code order: each differs from the one before by one player, so that each solve is one edit from the last. */
-export function grayCodeSubsets(players: number): readonly number[] {
-  return Array.from({ length: 1 << players }, (_, k) => k ^ (k >> 1));
-}

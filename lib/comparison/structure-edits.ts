@@ -6,7 +6,7 @@ export function structureEdits(base: CircuitFile, proposed: CircuitFile): readon
   const singles = (["reference", "top"] as const)
     .filter((key) => defaulted(base, key) !== defaulted(proposed, key))
     .map((key) =>
-      structureEdit(key, "value", base[key], proposed[key], (file) => {
+      structureEdit(key, base[key], proposed[key], (file) => {
         const { [key]: _, ...rest } = file;
         return proposed[key] === undefined ? rest : { ...rest, [key]: proposed[key] };
       }),
@@ -16,7 +16,7 @@ export function structureEdits(base: CircuitFile, proposed: CircuitFile): readon
     const is = proposed.blocks[block]?.ports ?? [];
     if (JSON.stringify(was) === JSON.stringify(is)) return [];
     return [
-      structureEdit(`${block} ports`, "connection", was, is, (file) => ({
+      structureEdit(`${block} ports`, was, is, (file) => ({
         ...file,
         blocks: {
           ...file.blocks,
@@ -33,17 +33,11 @@ function defaulted(file: CircuitFile, key: "reference" | "top"): string | undefi
   return file[key] ?? (key === "reference" ? "GND" : Object.keys(file.blocks)[0]);
 }
 
-function structureEdit(
-  key: string,
-  change: "value" | "connection",
-  was: unknown,
-  is: unknown,
-  apply: FileEdit["apply"],
-): FileEdit {
+function structureEdit(key: string, was: unknown, is: unknown, apply: FileEdit["apply"]): FileEdit {
   return {
     edit: {
       id: key,
-      change,
+      change: "value",
       key,
       ...(was !== undefined && { was }),
       ...(is !== undefined && { is }),
