@@ -48,8 +48,8 @@ export function refactor(matrix: SparseMatrix, before: Factor): Result<Factor, P
       lowerValue[t] = (work[i] ?? 0) / d;
       work[i] = 0;
     }
-    // Written so that NaN is refused.
-    if (!(Math.abs(d) > 0 && Math.abs(d) >= SMALLEST_PART * largest))
+    // Written so that NaN is refused, and what is infinite.
+    if (!(Math.abs(d) > 0 && Math.abs(d) >= SMALLEST_PART * largest && Number.isFinite(largest)))
       return fail({ kind: "pivotTooSmall", step: k });
     diagonal[k] = d;
   }

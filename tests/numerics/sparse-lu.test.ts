@@ -2,18 +2,10 @@ import fc from "fast-check";
 import { LuDecomposition, Matrix } from "ml-matrix";
 import { describe, expect, it } from "vitest";
 import { analyse } from "../../lib/numerics/analyse";
-import { factor } from "../../lib/numerics/factor";
 import { refactor } from "../../lib/numerics/refactor";
 import { errorBound } from "../../lib/numerics/skeel-condition";
 import { solve, solveTransposed } from "../../lib/numerics/solve";
-import { patternOfEntries, type SparseMatrix } from "../../lib/numerics/sparse-matrix";
-
-interface Entries {
-  readonly n: number;
-  readonly rows: readonly number[];
-  readonly columns: readonly number[];
-  readonly values: readonly number[];
-}
+import { assembled, dense, type Entries, factored, largest, product } from "./written-matrices";
 
 /** Random sparse matrices whose diagonal lies on a random permutation, so that most are regular. */
 const someEntries: fc.Arbitrary<Entries> = fc
@@ -36,48 +28,6 @@ const someEntries: fc.Arbitrary<Entries> = fc
     values: [...size.map((exponent) => 10 ** exponent), ...more.map(([, , value]) => value)],
   }));
 
-function assembled(entries: Entries): SparseMatrix {
-  const { pattern, slot } = patternOfEntries(entries.n, entries.rows, entries.columns);
-  const values = new Float64Array(pattern.rowIndex.length);
-  entries.values.forEach((value, k) => {
-    const at = slot[k] ?? 0;
-    values[at] = (values[at] ?? 0) + value;
-  });
-  return { pattern, values };
-}
-
-function dense(entries: Entries, transposed = false): Matrix {
-  const matrix = Matrix.zeros(entries.n, entries.n);
-  entries.values.forEach((value, k) => {
-    const row = entries.rows[k] ?? 0;
-    const column = entries.columns[k] ?? 0;
-    const [i, j] = transposed ? [column, row] : [row, column];
-    matrix.set(i, j, matrix.get(i, j) + value);
-  });
-  return matrix;
-}
-
-/** y = A x */
-function multiply(matrix: SparseMatrix, x: Float64Array, y: Float64Array): void {
-  const { n, columnStart, rowIndex } = matrix.pattern;
-  y.fill(0);
-  for (let column = 0; column < n; column++) {
-    const factor = x[column] ?? 0;
-    for (let p = columnStart[column] ?? 0; p < (columnStart[column + 1] ?? 0); p++) {
-      const row = rowIndex[p] ?? 0;
-      y[row] = (y[row] ?? 0) + (matrix.values[p] ?? 0) * factor;
-    }
-  }
-}
-
-function factored(matrix: SparseMatrix) {
-  const analysis = analyse(matrix);
-  return analysis.ok ? factor(matrix, analysis.value) : analysis;
-}
-
-const largest = (values: ArrayLike<number>): number =>
-  Array.from(values).reduce((most, value) => Math.max(most, Math.abs(value)), 0);
-
 describe("sparse LU", () => {
   it("solves as well as dense LU, whatever the order of rows and columns", () => {
     let solved = 0;
@@ -86,8 +36,7 @@ describe("sparse LU", () => {
         const matrix = assembled(entries);
         const made = factored(matrix);
         const wanted = Float64Array.from({ length: entries.n }, (_, i) => Math.sin(i + 1));
-        const b = new Float64Array(entries.n);
-        multiply(matrix, wanted, b);
+        const b = product(matrix, wanted);
         if (!made.ok) {
           expect(Math.abs(new LuDecomposition(dense(entries)).determinant)).toBeLessThan(1e-3);
           return;
@@ -106,7 +55,10 @@ describe("sparse LU", () => {
     fc.assert(
       fc.property(someEntries, (entries) => {
         const made = factored(assembled(entries));
-        if (!made.ok) return expect(made.ok).toBe(false);
+        if (!made.ok) {
+          expect(made.ok).toBe(false);
+          return;
+        }
         const b = Float64Array.from({ length: entries.n }, (_, i) => Math.cos(i));
         const x = solveTransposed(made.value, b);
         const back = dense(entries, true).mmul(Matrix.columnVector(Array.from(x)));
@@ -128,7 +80,10 @@ describe("sparse LU", () => {
       fc.property(someEntries, fc.double({ min: 0.5, max: 2, noNaN: true }), (entries, scale) => {
         const matrix = assembled(entries);
         const made = factored(matrix);
-        if (!made.ok) return expect(made.ok).toBe(false);
+        if (!made.ok) {
+          expect(made.ok).toBe(false);
+          return;
+        }
         const other = { ...matrix, values: matrix.values.map((value) => value * scale) };
         const again = refactor(other, made.value);
         expect(again.ok || again.error.kind === "pivotTooSmall").toBe(true);
