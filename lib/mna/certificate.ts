@@ -18,8 +18,9 @@ const LEAST_CURRENT = 1e-12;
 const LEAST_POWER = 1e-15;
 
 /**
- * The proof of an operating point: Kirchhoff's current law at every net, Tellegen's theorem over all
- * parts, and Skeel's bound. The system must have been assembled at `x`.
+ * What an operating point was held to: Kirchhoff's current law at every net, Tellegen's theorem over all
+ * parts, and an estimate of the rounding error by Skeel's condition, which the last step of `newton`, a
+ * refinement, makes valid. The system must have been assembled at `x`.
  * @param charging rates of charge by terminal, A, all laws one after the other; null: none
  */
 export function certify(
