@@ -11,6 +11,8 @@ export interface Factor {
   readonly n: number;
   /** Row of A that is pivot k. */
   readonly pivotRow: Int32Array;
+  /** Step at which a row of A is the pivot: the inverse of `pivotRow`. */
+  readonly stepOfRow: Int32Array;
   /** Column of A eliminated at step k. */
   readonly pivotColumn: Int32Array;
   readonly lowerStart: Int32Array;
@@ -100,6 +102,7 @@ export function factor(
     analysis,
     n,
     pivotRow,
+    stepOfRow,
     pivotColumn: analysis.column,
     lowerStart,
     lowerIndex: Int32Array.from(lowerRow, (row) => stepOfRow[row] ?? 0),

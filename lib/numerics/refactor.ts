@@ -16,10 +16,8 @@ const SMALLEST_PART = 1e-6;
  * cannot change pivots, so each is checked against its column.
  */
 export function refactor(matrix: SparseMatrix, before: Factor): Result<Factor, PivotTooSmall> {
-  const { n, pivotRow, pivotColumn, lowerStart, lowerIndex, upperStart, upperIndex } = before;
+  const { n, stepOfRow, pivotColumn, lowerStart, lowerIndex, upperStart, upperIndex } = before;
   const { columnStart, rowIndex } = matrix.pattern;
-  const stepOfRow = new Int32Array(n);
-  for (let k = 0; k < n; k++) stepOfRow[pivotRow[k] ?? 0] = k;
   const lowerValue = new Float64Array(lowerIndex.length);
   const upperValue = new Float64Array(upperIndex.length);
   const diagonal = new Float64Array(n);
