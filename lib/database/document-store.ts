@@ -79,11 +79,17 @@ export class PostgresDocumentStore {
     return found === null ? null : stored(found);
   }
 
-  /** Puts a snapshot in the place of the changes that it holds. */
-  async snapshot(designId: string, bytes: Uint8Array, held: readonly number[]): Promise<void> {
+  /**
+   * Puts a snapshot in the place of the changes that it holds. false, and nothing is written: another process has
+   * folded some of them meanwhile, and its snapshot may hold what this one does not.
+   */
+  async snapshot(designId: string, bytes: Uint8Array, held: readonly number[]): Promise<boolean> {
     const data = { bytes: new Uint8Array(bytes), at: new Date() };
-    await this.client.$transaction(async (transaction) => {
+    return this.client.$transaction(async (transaction) => {
+      // One fold of a design at a time: the second one sees what the first has taken.
+      await transaction.$executeRaw`select 1 from "Design" where id = ${designId} for no key update`;
       const rows = { designId, seq: { in: held.map(BigInt) } };
+      if ((await transaction.documentUpdate.count({ where: rows })) !== held.length) return false;
       const writers = await transaction.documentUpdate.groupBy({
         by: ["author"],
         where: { ...rows, author: { not: null } },
@@ -104,6 +110,7 @@ export class PostgresDocumentStore {
         update: data,
       });
       await transaction.documentUpdate.deleteMany({ where: rows });
+      return true;
     });
   }
 

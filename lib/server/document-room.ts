@@ -173,7 +173,9 @@ export class DocumentRoom {
 
   private async fold(): Promise<void> {
     const rows = [...this.held];
-    await this.store.snapshot(this.designId, Y.encodeStateAsUpdate(this.doc), rows);
+    const state = Y.encodeStateAsUpdate(this.doc);
+    // Where another process was faster, its snapshot is read, and what is still in the log is what this one holds.
+    if (!(await this.store.snapshot(this.designId, state, rows))) this.gap = true;
     for (const seq of rows) this.held.delete(seq);
   }
 

@@ -30,8 +30,8 @@ export interface DocumentStore {
   append(designId: string, rows: readonly NewUpdate[]): Promise<readonly number[]>;
   /** One row that another process stored; null: it is in a snapshot by now. */
   row(designId: string, seq: number): Promise<StoredUpdate | null>;
-  /** Replaces the rows that the snapshot holds. `held` are their numbers. */
-  snapshot(designId: string, bytes: Uint8Array, held: readonly number[]): Promise<void>;
+  /** Replaces the rows that the snapshot holds, `held` by their numbers. false, and nothing is done: some are folded already. */
+  snapshot(designId: string, bytes: Uint8Array, held: readonly number[]): Promise<boolean>;
   /** Whether the user is, or hereby becomes, the owner of a client id in a design: its first user owns it. */
   claimClientId(designId: string, clientId: number, userId: string): Promise<boolean>;
   /**

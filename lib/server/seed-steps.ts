@@ -26,14 +26,14 @@ export function openStory(people: ReadonlyMap<string, SeedPerson>): Story {
   return { people, computer: new RunComputer(new SolverRuns(database())) };
 }
 
-export function person(story: Story, name: string): SeedPerson {
+function person(story: Story, name: string): SeedPerson {
   const found = story.people.get(name);
   if (found === undefined) throw new Error(`${name} is not in the demo`);
   return found;
 }
 
 /** The value of a step that must not fail: the demo is a story that is known to go well. */
-export function told<Value, Failure>(result: Result<Value, Failure>): Value {
+function told<Value, Failure>(result: Result<Value, Failure>): Value {
   if (result.ok) return result.value;
   throw new Error(`The demo went wrong: ${JSON.stringify(result.error)}`);
 }
