@@ -23,6 +23,7 @@ import { DraftStateLine } from "./draft-state-line";
 import type { FreezeDeed } from "./freeze-deed";
 import { FreezeDialog } from "./freeze-dialog.client";
 import { PartsDrawer } from "./parts-drawer.client";
+import { RefusedCopy } from "./refused-copy.client";
 import { useLastResult } from "./use-last-result.client";
 import { useUndoKeys } from "./use-undo-keys.client";
 
@@ -35,12 +36,18 @@ export function DraftBoard(props: {
   readonly connection: DesignConnection;
   readonly freeze: (changeNote: string) => Promise<FreezeDeed>;
 }) {
-  const { view, connection } = props;
+  const { connection } = props;
+  const save = useSaveState(connection);
+  const isReadOnly = connection.isReadOnly();
+  const view = useMemo(
+    () => (isReadOnly ? { ...props.view, mayEdit: false } : props.view),
+    [props.view, isReadOnly],
+  );
+  const refusedCopy = save.kind === "refused" ? (connection.refused()?.copy ?? null) : null;
   const projection = useProjection(connection.doc);
   const { file } = projection;
   const preview = usePreview(file);
   const { result, before } = useLastResult(preview.answer);
-  const save = useSaveState(connection);
   const presence = useShownPresence(connection, view.me, view.people);
   const names = (file.conditions ?? [{ name: "Nominal" }]).map((one) => one.name);
   const [wanted, setCondition] = useState<string | null>(null);
@@ -78,6 +85,7 @@ export function DraftBoard(props: {
         }
         actions={
           <>
+            {refusedCopy !== null && <RefusedCopy copy={refusedCopy} number={view.design.number} />}
             <button
               type="button"
               className="btn"

@@ -10,7 +10,7 @@ import { useShownPresence } from "../collaboration/use-shown-presence.client";
 import type { SaveState } from "../wording/save-words";
 import type { ReviewSession } from "./session";
 
-const NOT_OPEN: SaveState = { kind: "saved" };
+const NOT_OPEN: SaveState = { kind: "saving" };
 
 /**
  * The live side of a review page. Until the shared document has come, what the page was made with

@@ -13,7 +13,7 @@ export interface ClaimedRun {
 /** A worker that says nothing for this long has lost its run. */
 export const LEASE_MS = 15_000;
 /** A run that has broken off this often, or killed as many workers, is given up. */
-export const MOST_ATTEMPTS = 5;
+const MOST_ATTEMPTS = 5;
 
 /** The database's clock: workers on several machines need not agree on the time. */
 const NOW = Prisma.sql`timezone('utc', clock_timestamp())`;

@@ -1,2 +1,2 @@
 /** Printed with every result: which engine computed it. */
-export const engineVersion = "0.1.0";
+export const engineVersion = "0.2.0";
