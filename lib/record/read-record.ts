@@ -1,4 +1,6 @@
 import { z } from "zod";
+import { parseJson } from "../circuit/json-text";
+import { problemsOfJson } from "../circuit/plain-json";
 import { fail, ok, type Result } from "../values/result";
 
 /**
@@ -45,34 +47,42 @@ const record = z.looseObject({
   releasedAt: z.string().nullable(),
 });
 
-const sealed = z.looseObject({
+/** Around the record nothing is sealed but what the seal itself is made of: anything more is refused. */
+const sealed = z.strictObject({
   record,
   digest: z.string(),
-  seal: z.looseObject({
+  seal: z.strictObject({
     protected: z.string(),
     signature: z.string(),
-    key: z.looseObject({ kty: z.literal("OKP"), crv: z.literal("Ed25519"), x: z.string() }),
+    key: z.strictObject({ kty: z.literal("OKP"), crv: z.literal("Ed25519"), x: z.string() }),
+    fingerprint: z.string(),
   }),
 });
 
 export type CheckableRecord = z.infer<typeof record>;
 export type CheckableSeal = z.infer<typeof sealed>;
 
-/** Reads a sealed record from its JSON text; the failure is one sentence with the place. */
+/**
+ * Reads a sealed record from its JSON text; the failure is one sentence with the place. Refused too
+ * is what programs read differently: a key that stands twice, a number beyond all doubles, half a
+ * surrogate pair.
+ */
 export function readSealedRecord(text: string): Result<CheckableSeal, string> {
-  let value: unknown;
-  try {
-    value = JSON.parse(text);
-  } catch (error) {
-    return fail(
-      `This is not JSON: ${error instanceof Error ? error.message : "it cannot be read"}.`,
-    );
-  }
-  const read = sealed.safeParse(value);
-  if (read.success) return ok(read.data);
-  const first = read.error.issues[0];
+  const parsed = parseJson(text);
+  if (!parsed.ok) return fail(`This is not a sealed review record: ${parsed.error.message}`);
+  const { value, duplicates } = parsed.value;
+  const [wrong] = [...duplicates, ...problemsOfJson(value)];
+  if (wrong !== undefined)
+    return fail(`This is not a sealed review record: at ${wrong.at}, ${wrong.message}`);
+  // What was parsed is given on, not zod's copy of it: the digest is over every key that is written.
+  if (isSealed(value)) return ok(value);
+  const first = sealed.safeParse(value).error?.issues[0];
   const at = first === undefined ? "" : first.path.map(String).join("/");
   return fail(
     `This is not a sealed review record: at /${at}, ${first?.message ?? "it has another shape"}.`,
   );
+}
+
+function isSealed(value: unknown): value is CheckableSeal {
+  return sealed.safeParse(value).success;
 }

@@ -1,6 +1,12 @@
-import { calculateJwkThumbprint, FlattenedSign, flattenedVerify, importJWK, type JWK } from "jose";
+import {
+  base64url,
+  calculateJwkThumbprint,
+  FlattenedSign,
+  flattenedVerify,
+  importJWK,
+  type JWK,
+} from "jose";
 import { digest } from "../circuit/digest";
-import { fail, ok, type Result } from "../values/result";
 import { canonicalBytes } from "./canonical";
 import type { CheckableSeal } from "./read-record";
 import type { ReviewRecord } from "./review-record";
@@ -45,28 +51,57 @@ export async function sealRecord(record: ReviewRecord, privateKey: JWK): Promise
   };
 }
 
-/** Checks digest and signature of a sealed record. The failure says which does not hold. */
-export async function checkSeal(
-  sealed: CheckableSeal,
-): Promise<Result<{ readonly fingerprint: string }, "digest" | "signature">> {
-  if (digest(sealed.record) !== sealed.digest) return fail("digest");
-  const payload = base64url(canonicalBytes(sealed.record));
+/** Of Ed25519, RFC 8032, section 5.1.5 and 5.1.6. */
+const KEY_BYTES = 32;
+const SIGNATURE_BYTES = 64;
+
+/** What holds of a seal: each told by itself, so that a reader learns which part was changed. */
+export interface SealState {
+  readonly digestHolds: boolean;
+  readonly signatureHolds: boolean;
+  /** RFC 7638 thumbprint of the key as computed here; null where the key is none, or another is written beside it. */
+  readonly fingerprint: string | null;
+}
+
+/** Checks digest, signature and fingerprint of a sealed record. */
+export async function checkSeal(sealed: CheckableSeal): Promise<SealState> {
+  return {
+    digestHolds: digest(sealed.record) === sealed.digest,
+    signatureHolds: await signatureHolds(sealed),
+    fingerprint: await fingerprintOf(sealed),
+  };
+}
+
+async function signatureHolds({ record, seal }: CheckableSeal): Promise<boolean> {
+  if (!holds(seal.signature, SIGNATURE_BYTES) || !holds(seal.key.x, KEY_BYTES)) return false;
+  const payload = base64url.encode(canonicalBytes(record));
   try {
-    const key = await importJWK(sealed.seal.key, "EdDSA");
-    await flattenedVerify(
-      { payload, protected: sealed.seal.protected, signature: sealed.seal.signature },
-      key,
-      { algorithms: ["EdDSA"] },
-    );
-    return ok({ fingerprint: await calculateJwkThumbprint(sealed.seal.key) });
+    const key = await importJWK(seal.key, "EdDSA");
+    await flattenedVerify({ payload, protected: seal.protected, signature: seal.signature }, key, {
+      algorithms: ["EdDSA"],
+    });
+    return true;
   } catch {
     // jose throws for a bad key, a bad header and a bad signature alike; here all mean the same.
-    return fail("signature");
+    return false;
   }
 }
 
-function base64url(bytes: Uint8Array): string {
-  let text = "";
-  for (const byte of bytes) text += String.fromCharCode(byte);
-  return btoa(text).replaceAll("+", "-").replaceAll("/", "_").replaceAll("=", "");
+async function fingerprintOf({ seal }: CheckableSeal): Promise<string | null> {
+  if (!holds(seal.key.x, KEY_BYTES)) return null;
+  const fingerprint = await calculateJwkThumbprint(seal.key);
+  return fingerprint === seal.fingerprint ? fingerprint : null;
+}
+
+/**
+ * Whether a text is the base64url of so many bytes. The last letter may hold bits that no byte has
+ * (RFC 4648, 3.5): one way of writing counts.
+ */
+function holds(text: string, count: number): boolean {
+  try {
+    const bytes = base64url.decode(text);
+    return bytes.length === count && base64url.encode(bytes) === text;
+  } catch {
+    return false;
+  }
 }

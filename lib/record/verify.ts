@@ -1,29 +1,10 @@
 import { digest } from "../circuit/digest";
-import { compare, type Side } from "../comparison/compare";
-import { isCircuitFile } from "../comparison/read-side";
-import { readCircuitFile } from "../kinds/read-circuit";
-import { judge } from "../stress/judge";
 import { auditChainFault } from "./audit-chain";
 import { type BoundDigests, boundDigest, boundDigests } from "./bound-digest";
-import { numberDifferences } from "./number-differences";
 import type { CheckableRecord, CheckableSeal } from "./read-record";
-import { checkSeal } from "./seal";
-
-/** One thing that was checked, and what was found. */
-export interface RecordCheck {
-  readonly check:
-    | "digest"
-    | "signature"
-    | "circuits"
-    | "bound"
-    | "signatures"
-    | "audit"
-    | "results"
-    | "comparison";
-  readonly holds: boolean;
-  /** One sentence. */
-  readonly message: string;
-}
+import { broken, held, type RecordCheck } from "./record-check";
+import { checkSeal, type SealState } from "./seal";
+import { solvedAgainChecks } from "./solved-again";
 
 export interface RecordVerdict {
   readonly holds: boolean;
@@ -42,17 +23,11 @@ export interface RecordVerdict {
 export async function verifyRecord(sealed: CheckableSeal): Promise<RecordVerdict> {
   const { record } = sealed;
   const seal = await checkSeal(sealed);
-  const digestHolds = seal.ok || seal.error === "signature";
   const checks: RecordCheck[] = [
-    digestHolds
+    seal.digestHolds
       ? held("digest", "The digest is that of the record.")
-      : broken(
-          "digest",
-          "The record is not the one its digest was taken of: something in it was changed.",
-        ),
-    seal.ok
-      ? held("signature", "The workspace key signed this record.")
-      : broken("signature", "The workspace key did not sign this record as it stands."),
+      : broken("digest", "The digest is of another record: one of the two was changed."),
+    signatureCheck(seal),
     circuitsCheck(record),
     boundCheck(record),
     signaturesCheck(record),
@@ -64,9 +39,17 @@ export async function verifyRecord(sealed: CheckableSeal): Promise<RecordVerdict
     design: record.design.number,
     revision: record.revision.letter,
     digest: sealed.digest,
-    fingerprint: seal.ok ? seal.value.fingerprint : null,
+    fingerprint: seal.signatureHolds ? seal.fingerprint : null,
     checks,
   };
+}
+
+function signatureCheck({ signatureHolds, fingerprint }: SealState): RecordCheck {
+  if (!signatureHolds)
+    return broken("signature", "The workspace key did not sign this record as it stands.");
+  return fingerprint === null
+    ? broken("signature", "The fingerprint beside the workspace key is that of another key.")
+    : held("signature", `The workspace key ${fingerprint} signed this record.`);
 }
 
 function revisionsOf(record: CheckableRecord): readonly CheckableRecord["revision"][] {
@@ -101,8 +84,9 @@ function policyOf(circuit: unknown): unknown {
 }
 
 function boundCheck(record: CheckableRecord): RecordCheck {
-  const now: Readonly<Record<string, string | null>> = { ...boundNow(record) };
-  const wrong = Object.entries(record.bound).find(([name, digest]) => now[name] !== digest);
+  const wrong = Object.entries(boundNow(record)).find(
+    ([name, digest]) => record.bound[name] !== digest,
+  );
   return wrong === undefined
     ? held(
         "bound",
@@ -111,23 +95,34 @@ function boundCheck(record: CheckableRecord): RecordCheck {
     : broken("bound", `The ${wrong[0]} are not those that were signed.`);
 }
 
+/** A void signature is told, and holds nothing back once a later one with its meaning stands. */
 function signaturesCheck(record: CheckableRecord): RecordCheck {
   const now = boundNow(record);
   const ours = record.decisions
     .filter(isSignature)
     .filter((signature) => signature.revision === record.revision.letter);
-  const wrong = ours.find(
-    (signature) => signature.boundDigest !== boundDigest(now, signature.meaning),
-  );
+  const stands = (signature: Signature): boolean =>
+    signature.boundDigest === boundDigest(now, signature.meaning);
+  const standing = ours.filter(stands);
+  const signed = new Set(standing.map((signature) => signature.meaning));
+  const wrong = ours.find((signature) => !stands(signature) && !signed.has(signature.meaning));
   if (wrong !== undefined)
     return broken(
       "signatures",
       `${wrong.name}'s signature (${wrong.meaning}) is bound to something else and is void.`,
     );
-  if (record.releasedAt !== null && !ours.some((signature) => signature.meaning === "approved"))
-    return broken("signatures", "The record says released, but nobody signed as approver.");
-  return held("signatures", `${ours.length} signatures, each bound to what stands here.`);
+  const missing = MEANINGS.find((meaning) => !signed.has(meaning));
+  if (record.releasedAt !== null && missing !== undefined)
+    return broken("signatures", `The record says released, but nobody signed it as ${missing}.`);
+  const voided = ours.length - standing.length;
+  return held(
+    "signatures",
+    `${standing.length} signatures, each bound to what stands here${voided === 0 ? "" : `; ${voided} earlier ones are void`}.`,
+  );
 }
+
+/** A release needs each of them. */
+const MEANINGS = ["authored", "reviewed", "approved"];
 
 type Signature = Extract<CheckableRecord["decisions"][number], { boundDigest: string }>;
 
@@ -140,45 +135,4 @@ function auditCheck(record: CheckableRecord): RecordCheck {
   return fault === null
     ? held("audit", `${record.audit.length} audit entries, chained without a gap.`)
     : broken("audit", `The audit chain is broken: ${fault}.`);
-}
-
-function solvedAgainChecks(record: CheckableRecord): readonly RecordCheck[] {
-  const proposed = sideOf(record.revision.circuit);
-  if (proposed === null) return [broken("results", "The circuit cannot be read.")];
-  const solved = judge(proposed.circuit, { everyCondition: true });
-  const differences = numberDifferences(record.result, solved);
-  const results =
-    differences.length === 0
-      ? held("results", `Solved again (engine ${solved.engine}): every number agrees.`)
-      : broken(
-          "results",
-          `Solved again (engine ${solved.engine}): ${differences.length} numbers differ, first ${differences[0] ?? ""}.`,
-        );
-  if (record.base === null || record.comparison === null) return [results];
-  const base = sideOf(record.base.circuit);
-  if (base === null) return [results, broken("comparison", "The base circuit cannot be read.")];
-  const moved = numberDifferences(record.comparison, compare(base, proposed));
-  return [
-    results,
-    moved.length === 0
-      ? held("comparison", "Compared again: every shift and cause agrees.")
-      : broken(
-          "comparison",
-          `Compared again: ${moved.length} numbers differ, first ${moved[0] ?? ""}.`,
-        ),
-  ];
-}
-
-function sideOf(file: unknown): Side | null {
-  if (!isCircuitFile(file)) return null;
-  const circuit = readCircuitFile(file);
-  return circuit.ok ? { file, circuit: circuit.value } : null;
-}
-
-function held(check: RecordCheck["check"], message: string): RecordCheck {
-  return { check, holds: true, message };
-}
-
-function broken(check: RecordCheck["check"], message: string): RecordCheck {
-  return { check, holds: false, message };
 }
